@@ -11,6 +11,6 @@ public enum What
 
     // Not in the job file's list of what, but doubts that results name: the engine's own fields, parts of a reading, and cuts.
     Drop, PinOffset, InletCloses, ExhaustCloses, Altitude, CrankingExponent,
-    HeadSkim, DeckCut, LineBore, BoreCut, Hone, Sleeve, ValveSeat,
+    HeadSkim, DeckCut, LineBore, ValveSeat,
 }
 #pragma warning restore CS1591

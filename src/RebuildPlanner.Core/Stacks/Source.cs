@@ -6,6 +6,9 @@ public enum SourceShape
     /// <summary>No doubt in the distribution, only worst limits: what the larger of two doubts has already covered.</summary>
     None,
 
+    /// <summary>No limits were written: counted as exact, yet never enough for proof.</summary>
+    Unstated,
+
     /// <summary>Rectangular between −u√3 and +u√3.</summary>
     Rectangular,
 
@@ -30,6 +33,9 @@ public readonly record struct Source(
     /// <summary>A rectangular doubt of the given half-width.</summary>
     public static Source Rectangular(double halfWidth) =>
         new(SourceShape.Rectangular, halfWidth / Math.Sqrt(3.0), double.PositiveInfinity, -1, -halfWidth, halfWidth);
+
+    /// <summary>The doubt of a length, area or volume written without limits: nothing is known of it but that it may matter.</summary>
+    public static Source Unstated { get; } = new(SourceShape.Unstated, 0.0, double.PositiveInfinity, -1, 0.0, 0.0);
 
     /// <summary>A normal doubt whose spread is known exactly; its worst limits are ±3u by agreement.</summary>
     public static Source Normal(double standardUncertainty) =>

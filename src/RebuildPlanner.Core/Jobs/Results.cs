@@ -1,0 +1,143 @@
+using RebuildPlanner.Core.Measuring;
+using RebuildPlanner.Core.Quantities;
+
+namespace RebuildPlanner.Core.Jobs;
+
+/// <summary>One computed quantity with how sure it is. Not computed is null.</summary>
+/// <param name="Value">First order value, in <paramref name="Kind"/>'s coherent unit.</param>
+/// <param name="Kind">Its kind.</param>
+/// <param name="StandardUncertainty">u, first order.</param>
+/// <param name="Low">Lower end of the 95 % coverage interval.</param>
+/// <param name="High">Upper end of the 95 % coverage interval.</param>
+/// <param name="WorstLow">Lower end of the worst case.</param>
+/// <param name="WorstHigh">Upper end of the worst case.</param>
+public sealed record ResultQuantity(
+    double Value, QuantityKind Kind, double? StandardUncertainty = null, double? Low = null, double? High = null,
+    double? WorstLow = null, double? WorstHigh = null);
+
+/// <summary>How much of the ratio's doubt counts under one thing.</summary>
+/// <param name="Input">Its word.</param>
+/// <param name="Share">Its share; all sum to 1.</param>
+public sealed record ResultShare(string Input, double Share);
+
+/// <summary>One cylinder's results.</summary>
+public sealed record CylinderResult(string Cylinder)
+{
+    /// <summary>Mean bore.</summary>
+    public ResultQuantity? Bore { get; init; }
+
+    /// <summary>Swept volume.</summary>
+    public ResultQuantity? SweptVolume { get; init; }
+
+    /// <summary>Clearance volume at top dead centre.</summary>
+    public ResultQuantity? ClearanceVolume { get; init; }
+
+    /// <summary>Static compression ratio.</summary>
+    public ResultQuantity? CompressionRatio { get; init; }
+
+    /// <summary>Trapped ratio.</summary>
+    public ResultQuantity? TrappedRatio { get; init; }
+
+    /// <summary>Cranking pressure, gauge.</summary>
+    public ResultQuantity? CrankingPressure { get; init; }
+
+    /// <summary>Piston to head.</summary>
+    public ResultQuantity? PistonToHead { get; init; }
+
+    /// <summary>Taper of the bore.</summary>
+    public ResultQuantity? Taper { get; init; }
+
+    /// <summary>Out-of-round of the bore.</summary>
+    public ResultQuantity? OutOfRound { get; init; }
+
+    /// <summary>Chamber.</summary>
+    public ResultQuantity? Chamber { get; init; }
+
+    /// <summary>Gasket volume.</summary>
+    public ResultQuantity? Gasket { get; init; }
+
+    /// <summary>Deck volume.</summary>
+    public ResultQuantity? Deck { get; init; }
+
+    /// <summary>Crown volume.</summary>
+    public ResultQuantity? Crown { get; init; }
+
+    /// <summary>Top-land crevice.</summary>
+    public ResultQuantity? TopLand { get; init; }
+
+    /// <summary>Whole chamber less the sum of its parts.</summary>
+    public ResultQuantity? CrossCheck { get; init; }
+
+    /// <summary>Shares of the ratio's doubt, largest first.</summary>
+    public IReadOnlyList<ResultShare> Shares { get; init; } = [];
+}
+
+/// <summary>Whether a limit is held.</summary>
+public enum VerdictState
+{
+    /// <summary>Held, proven to the level wanted.</summary>
+    Within,
+
+    /// <summary>Neither proven.</summary>
+    NotProven,
+
+    /// <summary>Broken, proven to the level wanted.</summary>
+    Outside,
+}
+
+/// <summary>One verdict on one limit.</summary>
+/// <param name="What">What the limit is about.</param>
+/// <param name="Cylinder">The cylinder, or null for the engine.</param>
+/// <param name="Limit">The limit as written.</param>
+/// <param name="Min">The least allowed.</param>
+/// <param name="Max">The greatest allowed.</param>
+/// <param name="State">The verdict.</param>
+/// <param name="Probability">That the true value is inside; null where a figure is missing.</param>
+/// <param name="Level">The belief wanted.</param>
+/// <param name="Settle">What would settle a verdict not proven, or null.</param>
+public sealed record Verdict(
+    string What, string? Cylinder, string Limit, ResultQuantity? Min, ResultQuantity? Max, VerdictState State, double? Probability,
+    double Level, string? Settle);
+
+/// <summary>Something to mind.</summary>
+/// <param name="Code">Its code, stable for other programs.</param>
+/// <param name="Text">In words.</param>
+/// <param name="Cylinder">The cylinder it is about, or null for all.</param>
+/// <param name="Figure">The figure it is about, or null.</param>
+public sealed record Caution(string Code, string Text, string? Cylinder = null, string? Figure = null);
+
+/// <summary>A figure nowhere to be found.</summary>
+/// <param name="What">Its word.</param>
+/// <param name="Cylinder">The cylinder.</param>
+public sealed record MissingFigure(string What, string Cylinder);
+
+/// <summary>Where a figure used came from.</summary>
+public sealed record ProvenanceLine(string What, string Cylinder, FigureKind Kind, Stage? Stage, string? From, string? Gauge);
+
+/// <summary>Everything known of an engine at one stage: what every face prints, computed once.</summary>
+public sealed record Results(string Job, Stage Stage)
+{
+    /// <summary>Sum of the swept volumes.</summary>
+    public ResultQuantity? Displacement { get; init; }
+
+    /// <summary>The cylinders in order.</summary>
+    public IReadOnlyList<CylinderResult> Cylinders { get; init; } = [];
+
+    /// <summary>Largest less smallest ratio.</summary>
+    public ResultQuantity? RatioSpread { get; init; }
+
+    /// <summary>Largest less smallest chamber.</summary>
+    public ResultQuantity? ChamberSpread { get; init; }
+
+    /// <summary>The verdicts, in the order of the limits.</summary>
+    public IReadOnlyList<Verdict> Verdicts { get; init; } = [];
+
+    /// <summary>The cautions, most serious first.</summary>
+    public IReadOnlyList<Caution> Cautions { get; init; } = [];
+
+    /// <summary>What is missing.</summary>
+    public IReadOnlyList<MissingFigure> Missing { get; init; } = [];
+
+    /// <summary>Where every figure used came from.</summary>
+    public IReadOnlyList<ProvenanceLine> Provenance { get; init; } = [];
+}

@@ -1,0 +1,75 @@
+using RebuildPlanner.Core.Cylinders;
+using RebuildPlanner.Core.Measuring;
+using RebuildPlanner.Core.Quantities;
+using RebuildPlanner.Core.Stacks;
+
+namespace RebuildPlanner.Core.Jobs;
+
+/// <summary>From a job and a stage to everything known of the engine there.</summary>
+public static class StageResults
+{
+    /// <summary>The coverage of the intervals printed, 1.</summary>
+    public const double Coverage = 0.95;
+
+    /// <summary>Computes the results.</summary>
+    /// <param name="job">The job.</param>
+    /// <param name="stage">The stage asked for.</param>
+    /// <returns>The results; <see cref="Results.Cylinders"/> hold nothing but nulls where no cylinder can be computed.</returns>
+    public static Results Of(Job job, Stage stage)
+    {
+        StageModel model = new(job, stage);
+        StageFigures figures = new(model);
+        IReadOnlyList<Verdict> verdicts = new Verdicts(model, figures).All();
+        return new Results(job.Number, stage)
+        {
+            Displacement = figures.Displacement is { } displacement ? figures.Quantity(displacement, QuantityKind.Volume) : null,
+            Cylinders = [.. Enumerable.Range(0, job.Engine.Cylinders).Select(cylinder => CylinderOf(model, figures, cylinder))],
+            RatioSpread = SpreadOf(figures, Output.CompressionRatio, QuantityKind.Ratio),
+            ChamberSpread = SpreadOf(figures, Output.Chamber, QuantityKind.Volume),
+            Verdicts = verdicts,
+            Cautions = Cautions.Of(model, figures),
+            Missing = model.Missing,
+            Provenance = [.. model.Used.Select(used => new ProvenanceLine(
+                WhatWords.Of(used.Figure.What), model.Search.Parts.Label(used.Cylinder), used.Figure.Kind, used.Figure.Stage, used.Figure.From,
+                used.Figure.Gauge))],
+        };
+    }
+
+    private static CylinderResult CylinderOf(StageModel model, StageFigures figures, int cylinder)
+    {
+        return new CylinderResult(model.Search.Parts.Label(cylinder))
+        {
+            Bore = Of(Output.Bore, QuantityKind.Length),
+            SweptVolume = Of(Output.SweptVolume, QuantityKind.Volume),
+            ClearanceVolume = Of(Output.ClearanceVolume, QuantityKind.Volume),
+            CompressionRatio = Of(Output.CompressionRatio, QuantityKind.Ratio),
+            TrappedRatio = Of(Output.TrappedRatio, QuantityKind.Ratio),
+            CrankingPressure = Of(Output.CrankingPressure, QuantityKind.Pressure),
+            PistonToHead = Of(Output.PistonToHead, QuantityKind.Length),
+            Chamber = Of(Output.Chamber, QuantityKind.Volume),
+            Gasket = Of(Output.Gasket, QuantityKind.Volume),
+            Deck = Of(Output.Deck, QuantityKind.Volume),
+            Crown = Of(Output.Crown, QuantityKind.Volume),
+            TopLand = Of(Output.TopLand, QuantityKind.Volume),
+            CrossCheck = Of(Output.CrossCheck, QuantityKind.Volume),
+            Taper = figures.Taper(cylinder) is { } taper ? figures.Quantity(taper, QuantityKind.Length, neverNegative: true) : null,
+            OutOfRound = figures.OutOfRound(cylinder) is { } round ? figures.Quantity(round, QuantityKind.Length, neverNegative: true) : null,
+            Shares = figures.Of(Output.CompressionRatio, cylinder) is null ? [] : SharesOf(figures.FirstOrder, cylinder),
+        };
+
+        ResultQuantity? Of(Output output, QuantityKind kind) =>
+            figures.Of(output, cylinder) is { } figure ? figures.Quantity(figure, kind) : null;
+    }
+
+    private static ResultShare[] SharesOf(FirstOrder firstOrder, int cylinder) =>
+    [
+        .. Enum.GetValues<What>()
+            .Select(what => (What: what, Share: firstOrder.Share(cylinder, what)))
+            .Where(share => share.Share != 0.0)
+            .OrderByDescending(share => share.Share)
+            .Select(share => new ResultShare(WhatWords.Of(share.What), share.Share)),
+    ];
+
+    private static ResultQuantity? SpreadOf(StageFigures figures, Output output, QuantityKind kind) =>
+        figures.Spread(output) is { } spread ? figures.Quantity(spread, kind, neverNegative: true) : null;
+}

@@ -1,0 +1,343 @@
+using RebuildPlanner.Core.Cylinders;
+using RebuildPlanner.Core.Measuring;
+using RebuildPlanner.Core.Numerics;
+using RebuildPlanner.Core.Stacks;
+
+namespace RebuildPlanner.Core.Jobs;
+
+/// <summary>What ends a figure at a stage, and the figure computed in its place.</summary>
+public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func<What, int, Stage, Figure?> find)
+{
+    private static readonly CutKind[] _boreCuts = [CutKind.Hone, CutKind.Bore, CutKind.Sleeve];
+
+    /// <summary>Whether what was done at a stage ends an earlier figure.</summary>
+    /// <param name="earlier">The figure, of an earlier stage or holding throughout.</param>
+    /// <param name="cylinder">The cylinder's index.</param>
+    /// <param name="stage">The stage at which something may have been done.</param>
+    public bool Ends(Figure earlier, int cylinder, Stage stage)
+    {
+        bool bored = _boreCuts.Any(kind => Made(kind));
+        bool skimmed = Made(CutKind.HeadSkim);
+        bool seats = Made(CutKind.ValveSeat);
+        bool decked = Made(CutKind.DeckCut) || Rise(cylinder, stage) is not null;
+        bool piston = PistonChanged(cylinder, stage, counts: earlier.Stage is not null);
+        return earlier.What switch
+        {
+            What.Bore or What.Wall => bored,
+            What.Chamber => skimmed || seats,
+            What.Deck => decked || piston || Changed(cylinder, stage).Any(),
+            What.Crown or What.Skirt or What.CompressionHeight or What.TopLandHeight or What.TopLandDiameter or What.Rock => piston,
+            What.RingGap => piston || bored,
+            What.WholeChamber => bored || skimmed || seats || decked || piston || GasketChanged(cylinder, stage, counts: earlier.Stage is not null)
+                || Changed(cylinder, stage).Any(),
+            What.PistonToValve => skimmed || seats || decked || piston || GasketChanged(cylinder, stage, counts: earlier.Stage is not null),
+            What.HeadHeight => skimmed,
+            What.BlockHeight or What.DeckHeight or What.BarrelHeight or What.LinerProtrusion => decked,
+            What.Flatness => skimmed || decked,
+            _ => false,
+        };
+
+        bool Made(CutKind kind) => parts.Cuts(kind, cylinder, stage).Any();
+    }
+
+    /// <summary>The figure carried through what was done at a stage, or null where a figure for it is missing.</summary>
+    /// <param name="what">The thing.</param>
+    /// <param name="earlier">Its figure before, or null; a bore needs none.</param>
+    /// <param name="cylinder">The cylinder's index.</param>
+    /// <param name="stage">The stage.</param>
+    /// <param name="before">The stage before, or null where there is none.</param>
+    public Figure? Carry(What what, Figure? earlier, int cylinder, Stage stage, Stage? before) => (what, earlier) switch
+    {
+        (What.Bore, _) => FinishedBore(cylinder, stage),
+        (What.Chamber, not null) => Chamber(earlier, cylinder, stage),
+        (What.Deck, not null) => Deck(earlier, cylinder, stage, before),
+        (What.HeadHeight, not null) => Less(earlier, stage, [.. Amounts(CutKind.HeadSkim, cylinder, stage)]),
+        (What.DeckHeight or What.BarrelHeight, not null) => Less(earlier, stage, [.. Amounts(CutKind.DeckCut, cylinder, stage)]),
+        (What.BlockHeight, not null) => Less(
+            earlier, stage, [.. Amounts(CutKind.DeckCut, cylinder, stage), .. Rise(cylinder, stage) is { } rise ? [rise] : Array.Empty<Figure>()]),
+        _ => null,
+    };
+
+    /// <summary>Deck clearance from block height, base gasket, crank, rod and compression height, where no deck figure exists.</summary>
+    public Figure? DeckStack(int cylinder, Stage stage)
+    {
+        if (find(What.BlockHeight, cylinder, stage) is not { } block
+            || find(What.CompressionHeight, cylinder, stage) is not { } compression
+            || ReachOf(cylinder, stage) is not { } reach)
+        {
+            return null;
+        }
+
+        Figure? baseGasket = find(What.BaseGasket, cylinder, stage);
+        Estimate deck = Estimate.Combine(
+            (1.0, block.Estimate), (1.0, baseGasket?.Estimate ?? Estimate.Zero), (-1.0, reach.Estimate), (-1.0, compression.Estimate));
+        return new Figure(What.Deck, deck, FigureKind.Computed, stage, "deck stack", null, [])
+        {
+            RestsOn = [block, compression, .. reach.RestsOn, .. baseGasket is null ? [] : new[] { baseGasket }],
+        };
+    }
+
+    private Figure? FinishedBore(int cylinder, Stage stage)
+    {
+        foreach (CutKind kind in _boreCuts)
+        {
+            foreach ((int index, Cut cut) in parts.Cuts(kind, cylinder, stage).Reverse())
+            {
+                if (cut.Value is not null)
+                {
+                    return new Figure(
+                        What.Bore, AmountOf(index, cut, cylinder), FigureKind.Computed, stage, CutWords.Of(kind), null, []);
+                }
+            }
+        }
+
+        CutKind made = _boreCuts.First(kind => parts.Cuts(kind, cylinder, stage).Any());
+        if (parts.Piston(cylinder, stage)?.Part is not { } piston)
+        {
+            return null;
+        }
+
+        // The size is a setting: the skirt decides it, but the bore's doubt is the process alone (it is measured against the finished size).
+        double? skirtMm = find(What.Skirt, cylinder, stage)?.Estimate.Value;
+        double? sizeMm = skirtMm is { } skirt && piston.WantedClearance is { } clearance ? skirt + clearance.Midpoint : piston.OversizeBore?.Midpoint;
+        return sizeMm is { } size
+            ? new Figure(
+                What.Bore, WithProcess(size, made, What.Bore, ("bored", parts.Label(cylinder), stage)), FigureKind.Computed, stage, CutWords.Of(made), null, [])
+            : null;
+    }
+
+    private Figure? Chamber(Figure earlier, int cylinder, Stage stage)
+    {
+        Figure[] skims = [.. Amounts(CutKind.HeadSkim, cylinder, stage)];
+        List<(double, Estimate)> sum = [(1.0, earlier.Estimate)];
+        List<Figure> restsOn = [earlier, .. skims];
+        if (skims.Length > 0)
+        {
+            if (find(What.ChamberOpeningArea, cylinder, stage) is not { } area)
+            {
+                return null;
+            }
+
+            Estimate skim = Estimate.Combine([.. skims.Select(figure => (1.0, figure.Estimate))]);
+            sum.Add((-1.0, DerivedEstimate.Of<Product>(book, What.HeadSkim, area.Estimate, skim)));
+            restsOn.Add(area);
+        }
+
+        foreach ((int index, Cut cut) in parts.Cuts(CutKind.ValveSeat, cylinder, stage))
+        {
+            foreach (Valve valve in cut.Place.Valve is { } one ? [one] : Enum.GetValues<Valve>())
+            {
+                if (OfValve(What.ValveHeadDiameter, valve) is not { } diameter)
+                {
+                    return null;
+                }
+
+                Estimate sink = OfValve(What.ValveSink, valve) ?? AmountOf(index, cut, cylinder);
+                sum.Add((ValvesOf(valve), DerivedEstimate.Of<DiscVolume>(book, What.ValveSink, diameter, sink)));
+            }
+        }
+
+        return new Figure(What.Chamber, Estimate.Combine([.. sum]), FigureKind.Computed, stage, "head skim and seat work", null, [])
+        {
+            RestsOn = restsOn,
+        };
+
+        Estimate? OfValve(What what, Valve valve)
+        {
+            Figure? figure = find(what, cylinder, stage);
+            if (what == What.ValveSink && figure?.Stage != stage)
+            {
+                return null;
+            }
+
+            return figure?.Places.FirstOrDefault(place => place.Place.Valve == valve)?.Estimate
+                ?? (figure is { Places: [] or [{ Place.Valve: null }] } ? figure.Estimate : null);
+        }
+    }
+
+    // Of an odd number the inlet has one more, as three- and five-valve heads are built.
+    private int ValvesOf(Valve valve)
+    {
+        int all = job.Engine.ValvesPerCylinder ?? 2;
+        return valve == Valve.Inlet ? (all + 1) / 2 : all / 2;
+    }
+
+    private Figure? Deck(Figure earlier, int cylinder, Stage stage, Stage? before)
+    {
+        List<(double, Estimate)> change = [];
+        List<Figure> restsOn = [earlier];
+        if (PistonChanged(cylinder, stage, counts: earlier.Stage is not null))
+        {
+            Figure? old = before is { } previous ? find(What.CompressionHeight, cylinder, previous) : null;
+            if (old is null || find(What.CompressionHeight, cylinder, stage) is not { } fresh)
+            {
+                return null;
+            }
+
+            Add(1.0, old);
+            Add(-1.0, fresh);
+        }
+
+        foreach (Figure cut in Amounts(CutKind.DeckCut, cylinder, stage))
+        {
+            Add(-1.0, cut);
+        }
+
+        if (Rise(cylinder, stage) is { } rise)
+        {
+            Add(-1.0, rise);
+        }
+
+        What[] changed = [.. Changed(cylinder, stage)];
+        if (changed.Contains(What.BaseGasket) && before is { } earlierStage)
+        {
+            Add(1.0, find(What.BaseGasket, cylinder, stage)!);
+            Add(-1.0, find(What.BaseGasket, cylinder, earlierStage)!);
+        }
+
+        if ((changed.Contains(What.RodLength) || changed.Contains(What.Stroke)) && before is { } then)
+        {
+            if (ReachOf(cylinder, then) is not { } oldReach || ReachOf(cylinder, stage) is not { } newReach)
+            {
+                return null;
+            }
+
+            Add(1.0, oldReach);
+            Add(-1.0, newReach);
+        }
+
+        return new Figure(What.Deck, With(earlier.Estimate), FigureKind.Computed, stage, "deck carried through the work", null, [])
+        {
+            Least = With(earlier.Least),
+            RestsOn = restsOn,
+        };
+
+        void Add(double sign, Figure figure)
+        {
+            change.Add((sign, figure.Estimate));
+            restsOn.Add(figure);
+        }
+
+        Estimate With(Estimate old) => Estimate.Combine([(1.0, old), .. change]);
+    }
+
+    private static Figure Less(Figure earlier, Stage stage, Figure[] removed) =>
+        new(
+            earlier.What,
+            Estimate.Combine([(1.0, earlier.Estimate), .. removed.Select(cut => (-1.0, cut.Estimate))]),
+            FigureKind.Computed, stage, "less the cut", null, [])
+        {
+            RestsOn = [earlier, .. removed],
+        };
+
+    private Figure? ReachOf(int cylinder, Stage stage)
+    {
+        if (find(What.Stroke, cylinder, stage) is not { } stroke || find(What.RodLength, cylinder, stage) is not { } rod)
+        {
+            return null;
+        }
+
+        Figure? offset = find(What.PinOffset, cylinder, stage);
+        Estimate reach = DerivedEstimate.Of<ReachFormula>(
+            book, What.RodLength, stroke.Estimate, rod.Estimate, offset?.Estimate ?? Estimate.Zero);
+        return new Figure(What.RodLength, reach, FigureKind.Computed, stage, null, null, []) { RestsOn = [stroke, rod] };
+    }
+
+    /// <summary>Rod, crank or base gasket that became another at a stage: stated anew there, or measured at two stages.</summary>
+    private IEnumerable<What> Changed(int cylinder, Stage stage)
+    {
+        int index = parts.Stages.ToList().IndexOf(stage);
+        if (index == 0)
+        {
+            yield break;
+        }
+
+        foreach (What what in new[] { What.Stroke, What.RodLength, What.BaseGasket })
+        {
+            Figure? now = find(what, cylinder, stage), then = find(what, cylinder, parts.Stages[index - 1]);
+            if (now?.Stage == stage && then is not null && (now.Kind != FigureKind.Measured || then.Stage is not null))
+            {
+                yield return what;
+            }
+        }
+    }
+
+    private bool PistonChanged(int cylinder, Stage stage, bool counts) =>
+        ChangedPart(parts.Piston(cylinder, stage), Before(stage) is { } before ? parts.Piston(cylinder, before) : null, stage, counts);
+
+    private bool GasketChanged(int cylinder, Stage stage, bool counts) =>
+        ChangedPart(parts.Gasket(cylinder, stage), Before(stage) is { } before ? parts.Gasket(cylinder, before) : null, stage, counts);
+
+    /// <summary>A part put in where none was recorded is a change for what was read before it, but not for a figure that holds throughout.</summary>
+    private static bool ChangedPart<TPart>(FittedPart<TPart>? now, FittedPart<TPart>? then, Stage stage, bool firstCounts) =>
+        now is not null && now.Since == stage && (then is not null || firstCounts);
+
+    private Stage? Before(Stage stage)
+    {
+        int index = parts.Stages.ToList().IndexOf(stage);
+        return index > 0 ? parts.Stages[index - 1] : null;
+    }
+
+    /// <summary>How far the crank rises at a stage: by line boring, or as read.</summary>
+    private Figure? Rise(int cylinder, Stage stage) =>
+        find(What.CrankRise, cylinder, stage) is { } read && read.Stage == stage
+            ? read
+            : Amounts(CutKind.LineBore, cylinder, stage).FirstOrDefault();
+
+    private IEnumerable<Figure> Amounts(CutKind kind, int cylinder, Stage stage) =>
+        parts.Cuts(kind, cylinder, stage)
+            .Where(cut => cut.Cut.Value is not null)
+            .Select(cut => new Figure(
+                CutWords.WhatOf(kind), AmountOf(cut.Index, cut.Cut, cylinder), FigureKind.Given, stage, CutWords.Of(kind), null, []));
+
+    private Estimate AmountOf(int index, Cut cut, int cylinder)
+    {
+        object owner = cut.Kind switch
+        {
+            CutKind.HeadSkim => parts.Head(cylinder).Label,
+            CutKind.DeckCut => parts.Bank(cylinder),
+            CutKind.LineBore => "engine",
+            _ => parts.Label(cylinder),
+        };
+        What what = CutWords.WhatOf(cut.Kind);
+        return cut.Value is { Limits: null } bare
+            ? WithProcess(bare.Value, cut.Kind, what, ("cut", index, owner))
+            : StatedFigures.EstimateOf(cut.Value!, what, ("cut", index, owner), book);
+    }
+
+    /// <summary>A setting with the process tolerance as its doubt; a cut of zero has none.</summary>
+    private Estimate WithProcess(double value, CutKind kind, What what, object identity)
+    {
+        if (value == 0.0)
+        {
+            return Estimate.Zero;
+        }
+
+        double? toleranceMm = job.Processes.LastOrDefault(process => process.Kind == kind && process.Tolerance is not null)?.Tolerance!.Midpoint;
+        Source source = toleranceMm switch
+        {
+            null => Source.Unstated,
+            > 0.0 and double halfWidth => Source.Rectangular(halfWidth),
+            _ => Source.WorstOnly(0.0, 0.0),
+        };
+        return new Estimate(value, [new Term(book.Shared((what, identity), source), 1.0, what)]);
+    }
+
+    private readonly struct Product : IFormula
+    {
+        public static T Of<T>(ReadOnlySpan<T> figures)
+            where T : struct, IScalar<T> => figures[0] * figures[1];
+    }
+
+    private readonly struct DiscVolume : IFormula
+    {
+        public static T Of<T>(ReadOnlySpan<T> figures)
+            where T : struct, IScalar<T> => Volumes.OfCylinder(figures[0], figures[1]);
+    }
+
+    private readonly struct ReachFormula : IFormula
+    {
+        public static T Of<T>(ReadOnlySpan<T> figures)
+            where T : struct, IScalar<T> => SliderCrank.Reach(figures[0], figures[1], figures[2]);
+    }
+}

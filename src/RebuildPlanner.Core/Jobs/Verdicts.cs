@@ -1,0 +1,190 @@
+using RebuildPlanner.Core.Cylinders;
+using RebuildPlanner.Core.Measuring;
+using RebuildPlanner.Core.Quantities;
+using RebuildPlanner.Core.Stacks;
+
+namespace RebuildPlanner.Core.Jobs;
+
+/// <summary>Which limits hold: the belief that the true value is inside, single and joint, and what would settle a doubtful one.</summary>
+/// <remarks>Source: jcgm106 (8.3.1). A figure without limits is never enough for proof, though its probability is still printed.</remarks>
+public sealed class Verdicts(StageModel model, StageFigures figures)
+{
+    /// <summary>The verdicts on every limit that is judged at the stage, in the order of the limits.</summary>
+    public IReadOnlyList<Verdict> All() => [.. model.Job.Limits.Where(IsJudged).SelectMany(Of)];
+
+    // A worn engine is not judged as received unless a limit says so.
+    private bool IsJudged(Limit limit) =>
+        limit.Stage is { } stage ? stage == model.Stage : model.Stage is Stage.Planned or Stage.AsMachined;
+
+    private IEnumerable<Verdict> Of(Limit limit)
+    {
+        Line[] lines = [.. Lines(limit)];
+        foreach (Line line in lines.Where(line => line.Cylinder is not null))
+        {
+            yield return Judge(limit, line.Cylinder, [line]);
+        }
+
+        if (limit.Place.Cylinder is null)
+        {
+            yield return Judge(limit, null, lines);
+        }
+    }
+
+    /// <summary>One figure under one limit, or the word of what it lacks.</summary>
+    private readonly record struct Line(string? Cylinder, LinearFigure? Figure, string? Lacks);
+
+    private IEnumerable<Line> Lines(Limit limit)
+    {
+        Output? spread = limit.Subject.Derived switch
+        {
+            Derived.ChamberSpread => Output.Chamber,
+            Derived.RatioSpread => Output.CompressionRatio,
+            _ => null,
+        };
+        if (spread is { } output)
+        {
+            return [new Line(null, figures.Spread(output), FirstMissing(null) ?? limit.Subject.Word)];
+        }
+
+        IEnumerable<int> cylinders = Enumerable.Range(0, model.Job.Engine.Cylinders).Where(cylinder => model.Search.Parts.Covers(limit.Place, cylinder));
+        Belongs belongs = limit.Subject.What is { } what ? WhatTable.Line(what).Belongs : Belongs.Cylinder;
+        return belongs switch
+        {
+            Belongs.Cylinder => cylinders.Select(cylinder => LineOf(limit, cylinder, model.Search.Parts.Label(cylinder))),
+            Belongs.Head => cylinders.DistinctBy(cylinder => model.Search.Parts.Head(cylinder).Label).Select(cylinder => LineOf(limit, cylinder, null)),
+            Belongs.Bank => cylinders.DistinctBy(model.Search.Parts.Bank).Select(cylinder => LineOf(limit, cylinder, null)),
+            _ => cylinders.Take(1).Select(cylinder => LineOf(limit, cylinder, null)),
+        };
+    }
+
+    private Line LineOf(Limit limit, int cylinder, string? label)
+    {
+        string? lacks = null;
+        LinearFigure? figure = limit.Subject switch
+        {
+            { Derived: Derived.CompressionRatio } => figures.Of(Output.CompressionRatio, cylinder),
+            { Derived: Derived.TrappedRatio } => figures.Of(Output.TrappedRatio, cylinder),
+            { Derived: Derived.CrankingPressure } => figures.Of(Output.CrankingPressure, cylinder),
+            { Derived: Derived.PistonToHead } => figures.Of(Output.PistonToHead, cylinder),
+            { Derived: Derived.Taper } => figures.Taper(cylinder),
+            { Derived: Derived.OutOfRound } => figures.OutOfRound(cylinder),
+            { Derived: Derived.BoreClearance } => Difference(What.Bore, What.Skirt, 1.0),
+            { Derived: Derived.GasketOverhang } => Difference(What.GasketOpening, What.Bore, 0.5),
+            { What: { } what } => OfWhat(what),
+            _ => null,
+        };
+        return new Line(label, figure, figure is null ? lacks ?? FirstMissing(cylinder) ?? limit.Subject.Word : null);
+
+        LinearFigure? Difference(What minuend, What subtrahend, double factor)
+        {
+            Figure? up = Find(minuend), down = Find(subtrahend);
+            return up is null || down is null || up.IsArea ? null : figures.Linear((factor, up.Estimate), (-factor, down.Estimate));
+        }
+
+        // Places that differ because the part differs there, as walls do, are not averaged: the one nearest the limit is judged.
+        LinearFigure? OfWhat(What what)
+        {
+            if (Find(what) is not { } found)
+            {
+                return null;
+            }
+
+            bool separate = (WhatTable.Line(what).Keys & (PlaceKeys.Clock | PlaceKeys.Valve)) != 0;
+            IEnumerable<PlacedEstimate> places = found.Places.Where(place => limit.Place.Valve is null || place.Place.Valve == limit.Place.Valve);
+            Estimate? estimate = !separate || found.Places.Count == 0 ? found.Estimate
+                : limit.Min is not null ? places.MinBy(place => place.Estimate.Value)?.Estimate
+                : places.MaxBy(place => place.Estimate.Value)?.Estimate;
+            return estimate is null ? null : figures.Linear((1.0, estimate));
+        }
+
+        Figure? Find(What what)
+        {
+            Figure? found = model.FindForVerdict(what, cylinder);
+            lacks ??= found is null ? WhatWords.Of(what) : null;
+            return found;
+        }
+    }
+
+    private string? FirstMissing(int? cylinder) =>
+        model.Missing.FirstOrDefault(missing => cylinder is null || missing.Cylinder == model.Search.Parts.Label(cylinder.Value))?.What;
+
+    private Verdict Judge(Limit limit, string? cylinder, Line[] lines)
+    {
+        double level = limit.Level ?? Subjects.DefaultLevel(limit.Subject);
+        ResultQuantity? min = Bound(limit.Min), max = Bound(limit.Max);
+        string written = string.Join(", ", new[] { Written("min", limit.Min), Written("max", limit.Max) }.OfType<string>());
+        if (lines.Length == 0 || Array.Exists(lines, line => line.Figure is null))
+        {
+            string? lacks = lines.FirstOrDefault(line => line.Figure is null).Lacks;
+            return new Verdict(limit.Subject.Word, cylinder, written, min, max, VerdictState.NotProven, null, level, lacks);
+        }
+
+        LinearFigure[] judged = [.. lines.Select(line => line.Figure!)];
+        double probability = Probability(limit, [.. judged.Select(figure => figure.Row.ToArray())], judged);
+        string? unstated = Unstated(judged);
+        VerdictState state = Decide(probability, level);
+        if (state == VerdictState.Within && unstated is not null)
+        {
+            state = VerdictState.NotProven;
+        }
+
+        string? settle = state != VerdictState.NotProven ? null : unstated ?? Settling(limit, judged, level);
+        return new Verdict(limit.Subject.Word, cylinder, written, min, max, state, probability, level, settle);
+    }
+
+    private static VerdictState Decide(double probability, double level) =>
+        probability >= level ? VerdictState.Within : probability <= 1.0 - level ? VerdictState.Outside : VerdictState.NotProven;
+
+    private double Probability(Limit limit, double[][] rows, LinearFigure[] judged)
+    {
+        double[] lows = [.. judged.Select(figure => (limit.Min?.Midpoint ?? double.NegativeInfinity) - figure.Value)];
+        double[] highs = [.. judged.Select(figure => (limit.Max?.Midpoint ?? double.PositiveInfinity) - figure.Value)];
+        return JointProbability.Inside(model.Model.Sources, rows, lows, highs);
+    }
+
+    /// <summary>The first figure without limits that moves what is judged, or null.</summary>
+    private string? Unstated(LinearFigure[] judged)
+    {
+        foreach (LinearFigure figure in judged)
+        {
+            foreach (Term term in figure.Terms)
+            {
+                if (model.Model.Sources[term.Source].Shape == SourceShape.Unstated && figure.Row[term.Source] != 0.0)
+                {
+                    return WhatWords.Of(term.What);
+                }
+            }
+        }
+
+        return null;
+    }
+
+    /// <summary>The one input whose doubt set to zero would prove the verdict, largest share first; null where none alone would.</summary>
+    private string? Settling(Limit limit, LinearFigure[] judged, double level)
+    {
+        Dictionary<What, double> shares = [];
+        foreach (LinearFigure figure in judged)
+        {
+            foreach (Term term in figure.Terms)
+            {
+                double part = term.Coefficient * figure.Row[term.Source] * model.Model.Variances[term.Source];
+                shares[term.What] = shares.GetValueOrDefault(term.What) + part;
+            }
+        }
+
+        foreach ((What what, double share) in shares.OrderByDescending(share => share.Value))
+        {
+            if (share > 0.0
+                && Decide(Probability(limit, [.. judged.Select(figure => figure.RowWithout(what))], judged), level) != VerdictState.NotProven)
+            {
+                return WhatWords.Of(what);
+            }
+        }
+
+        return null;
+    }
+
+    private static ResultQuantity? Bound(Quantity? written) => written is null ? null : new ResultQuantity(written.Midpoint, written.Kind);
+
+    private static string? Written(string word, Quantity? written) => written is null ? null : $"{word} {written.Text}";
+}
