@@ -41,10 +41,10 @@ internal static class UnitRule
         return bareLimit ? $"The limit needs its unit too, as in 0.03 {value.Word}." : OneKind(units);
     }
 
-    /// <summary>A wanted kind with its usual units: "a volume is wanted here: cc, mL or cu in".</summary>
-    public static string Wanted(QuantityRule rule) => string.Join(" or ", rule.Kinds.Select(kind => kind == QuantityKind.Ratio
-        ? "a bare number is wanted here, without a unit"
-        : $"{Name(kind)} is wanted here: {Listed([.. UnitTable.Usual(kind).Select(unit => unit.Word)])}"));
+    /// <summary>The kinds wanted with their usual units, opening a sentence: "a volume is wanted here: cc, mL or cu in".</summary>
+    public static string Wanted(QuantityRule rule) => rule.Kinds is [{ } only]
+        ? only == QuantityKind.Ratio ? "a bare number is wanted here, without a unit" : $"{Name(only)} is wanted here: {Units(only)}"
+        : $"{string.Join(" or ", rule.Kinds.Select(kind => $"{Name(kind)} ({Units(kind)})"))} is wanted here";
 
     public static string Listed(IReadOnlyList<string> words) =>
         words.Count < 2 ? string.Concat(words) : string.Join(", ", words.SkipLast(1)) + " or " + words[^1];
@@ -73,10 +73,14 @@ internal static class UnitRule
         return $"The unit is missing: write {Listed(ways)}.";
     }
 
+    private static string Units(QuantityKind kind) => Listed([.. UnitTable.Usual(kind).Select(unit => unit.Word)]);
+
     private static string? OneKind(SettledUnits units) =>
         units.First!.Kind == units.Kind && units.Second!.Kind == units.Kind
             ? null
-            : $"A figure and its limits are of one kind: {Name(units.Kind)} cannot have {Name(units.First.Kind != units.Kind ? units.First.Kind : units.Second!.Kind)} as its limit.";
+            : $"A figure and its limits are of one kind: {Name(units.Kind)} cannot have {Name(OtherKind(units))} as its limit.";
+
+    private static QuantityKind OtherKind(SettledUnits units) => units.First!.Kind != units.Kind ? units.First.Kind : units.Second!.Kind;
 
     private static bool IsWritten(WrittenQuantity written, int part) =>
         part == 1 ? written.Form != LimitForm.None : written.Form == LimitForm.UpperLower;
