@@ -59,7 +59,9 @@ internal static class UnitRule
 
         if (SignWordTable.IsWord(word))
         {
-            return rule.Kinds.Contains(QuantityKind.Ratio) ? $"No closing word belongs here: leave {word} out." : Missing(written.Value.Number, rule);
+            return rule.Kinds.Contains(QuantityKind.Ratio)
+                ? $"No closing word belongs here: leave {word} out."
+                : Missing(written.Value.Number, rule);
         }
 
         return UnitTable.Nearest(word, rule.Kinds) is { } nearest && UnitTable.Find(nearest) is { } near && rule.Kinds.Contains(near.Kind)

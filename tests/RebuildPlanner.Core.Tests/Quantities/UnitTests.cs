@@ -2,7 +2,7 @@ using RebuildPlanner.Core.Quantities;
 
 namespace RebuildPlanner.Core.Tests.Quantities;
 
-/// <summary>Against NIST Special Publication 811 (2008), appendix B.8: factors printed in bold there are exact, and so compared bit for bit.</summary>
+/// <summary>Against NIST Special Publication 811 (2008), appendix B: factors in bold there are exact, and so compared bit for bit.</summary>
 public class UnitTests
 {
     [Theory]
