@@ -79,8 +79,11 @@ public sealed record WhatLine(
 public static class WhatTable
 {
     /// <summary>Every line, in the order of the enumeration.</summary>
-    public static IReadOnlyList<WhatLine> Lines => throw new NotImplementedException();
+    public static IReadOnlyList<WhatLine> Lines => WhatLines.All;
 
     /// <summary>The line of a thing in the job file's list.</summary>
     public static WhatLine Line(What what) => Lines[(int)what];
+
+    /// <summary>The line with the given word, spelled exactly, or null.</summary>
+    public static WhatLine? Find(string word) => Lines.FirstOrDefault(line => line.Word == word);
 }
