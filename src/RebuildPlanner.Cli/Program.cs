@@ -1,1 +1,3 @@
-return 0;
+using RebuildPlanner.Cli;
+
+return Shell.Run(args, Terminal.OfConsole());

@@ -1,4 +1,3 @@
-using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
 
 namespace RebuildPlanner.Core.Jobs;
@@ -117,6 +116,9 @@ public sealed record ProvenanceLine(string What, string Cylinder, FigureKind Kin
 /// <summary>Everything known of an engine at one stage: what every face prints, computed once.</summary>
 public sealed record Results(string Job, Stage Stage)
 {
+    /// <summary>True where nothing of any cylinder could be computed.</summary>
+    public bool IsEmpty => Cylinders.All(cylinder => cylinder == new CylinderResult(cylinder.Cylinder) { Shares = cylinder.Shares });
+
     /// <summary>Sum of the swept volumes.</summary>
     public ResultQuantity? Displacement { get; init; }
 

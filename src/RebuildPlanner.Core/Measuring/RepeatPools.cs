@@ -1,4 +1,3 @@
-using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Stacks;
 
 namespace RebuildPlanner.Core.Measuring;

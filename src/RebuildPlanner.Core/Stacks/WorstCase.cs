@@ -1,6 +1,5 @@
 using RebuildPlanner.Core.Cylinders;
 using RebuildPlanner.Core.Jobs;
-using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Numerics;
 
 namespace RebuildPlanner.Core.Stacks;

@@ -1,0 +1,50 @@
+using System.CommandLine;
+
+namespace RebuildPlanner.Cli;
+
+/// <summary><c>completions</c>: a script that lets the shell finish words of this program.</summary>
+public static class CompletionsCommand
+{
+    private const string Bash = """
+        _rebuild() {
+            local IFS=$'\n'
+            COMPREPLY=($(rebuild "[suggest:$COMP_POINT]" "$COMP_LINE" 2>/dev/null))
+        }
+        complete -o default -F _rebuild rebuild
+        """;
+
+    private const string Zsh = """
+        _rebuild() {
+            local -a words
+            words=("${(@f)$(rebuild "[suggest:$CURSOR]" "$BUFFER" 2>/dev/null)}")
+            compadd -- $words
+            _files
+        }
+        compdef _rebuild rebuild
+        """;
+
+    private const string Fish = """
+        complete -c rebuild -a '(set -l line (commandline -cp); rebuild "[suggest:"(string length -- $line)"]" "$line" 2>/dev/null)'
+        """;
+
+    private const string Description = """
+        Prints a script that lets the shell finish this program's words.
+
+        Example:
+          rebuild completions bash >> ~/.bashrc
+        """;
+
+    /// <summary>Makes the command.</summary>
+    public static Command Make(Terminal terminal)
+    {
+        Argument<string> shell = new("shell") { Description = "bash, zsh or fish." };
+        shell.AcceptOnlyFromAmong("bash", "zsh", "fish");
+        Command command = new("completions", Description) { shell };
+        command.SetAction(parsed =>
+        {
+            terminal.Output.WriteLine(parsed.GetValue(shell) switch { "bash" => Bash, "zsh" => Zsh, _ => Fish });
+            return ExitCode.Done;
+        });
+        return command;
+    }
+}

@@ -1,0 +1,40 @@
+using System.CommandLine;
+using System.CommandLine.Parsing;
+
+namespace RebuildPlanner.Cli;
+
+/// <summary>The command line: its commands, one file each, and how a wrong request is answered.</summary>
+public static class Shell
+{
+    /// <summary>Runs one command.</summary>
+    /// <returns>The exit code, see <see cref="ExitCode"/>.</returns>
+    public static int Run(string[] args, Terminal terminal)
+    {
+        RootCommand root = Commands(terminal);
+        ParseResult parsed = root.Parse(args, new ParserConfiguration { ResponseFileTokenReplacer = null });
+        if (parsed.Errors.Count > 0)
+        {
+            foreach (ParseError error in parsed.Errors)
+            {
+                terminal.Error.WriteLine($"rebuild: {error.Message}");
+            }
+
+            terminal.Error.WriteLine("See rebuild --help, or rebuild results --help.");
+            return ExitCode.Wrong;
+        }
+
+        return parsed.Invoke(new InvocationConfiguration
+        {
+            Output = terminal.Output,
+            Error = terminal.Error,
+            EnableDefaultExceptionHandler = false,
+        });
+    }
+
+    private static RootCommand Commands(Terminal terminal) =>
+        new("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.")
+        {
+            ResultsCommand.Make(terminal),
+            CompletionsCommand.Make(terminal),
+        };
+}
