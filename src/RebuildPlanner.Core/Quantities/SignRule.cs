@@ -17,9 +17,10 @@ internal static class SignRule
         {
             string unit = written.Value.Unit ?? UnitTable.Usual(kind).Select(usual => usual.Word).FirstOrDefault("");
             string example = $"{written.Value.Number.Text.TrimStart('-', '−')} {unit}";
+            string likely = SignWordTable.Word(rule.Signs, (double)written.Value.Number.Value);
             return negative
                 ? $"A word says which way, not a minus sign: {UnitRule.Listed(words)}, as in {example} {words[1]}."
-                : $"It must end with {UnitRule.Listed(words)}, as in {example} {words[0]}.";
+                : $"It must end with {UnitRule.Listed(words)}, as in {example} {likely}.";
         }
 
         return !negative ? null

@@ -36,9 +36,10 @@ internal static class UnitRule
 
         WrittenUnit? second = found[2], first = found[1] ?? second, value = found[0] ?? first;
         units = new(value!.Kind, value, first ?? value, second ?? value);
-        bool bareLimit = (IsWritten(written, 1) && first is null && written.First.Number.Value != 0m)
-            || (IsWritten(written, 2) && second is null && written.Second.Number.Value != 0m);
-        return bareLimit ? $"The limit needs its unit too, as in 0.03 {value.Word}." : OneKind(units);
+        WrittenNumber? bare = first is null && written.Form != LimitForm.None && written.First.Number.Value != 0m ? written.First.Number
+            : second is null && written.Form == LimitForm.UpperLower && written.Second.Number.Value != 0m ? written.Second.Number
+            : null;
+        return bare is { } number ? $"The limit needs its unit too: write {number.Text} {value.Word}." : OneKind(units);
     }
 
     /// <summary>The kinds wanted with their usual units, opening a sentence: "a volume is wanted here: cc, mL or cu in".</summary>
@@ -83,9 +84,6 @@ internal static class UnitRule
             : $"A figure and its limits are of one kind: {Name(units.Kind)} cannot have {Name(OtherKind(units))} as its limit.";
 
     private static QuantityKind OtherKind(SettledUnits units) => units.First!.Kind != units.Kind ? units.First.Kind : units.Second!.Kind;
-
-    private static bool IsWritten(WrittenQuantity written, int part) =>
-        part == 1 ? written.Form != LimitForm.None : written.Form == LimitForm.UpperLower;
 
     private static string Name(QuantityKind kind) => kind switch
     {

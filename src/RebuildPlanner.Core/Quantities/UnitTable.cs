@@ -48,7 +48,7 @@ internal static class UnitTable
     [
         ("in", ["inch", "inches", "ins"]), ("µm", ["micron", "microns"]), ("thou", ["thousandth", "thousandths"]), ("ft", ["foot", "feet"]),
         ("m", ["metre", "meter"]), ("mm", ["millimetre", "millimeter"]), ("L", ["litre", "liter"]), ("cc", ["ccm"]),
-        ("cu in", ["ci", "cid", "cui"]), ("in2", ["sq", "sqin"]), ("deg", ["degree", "degrees"]), ("C", ["celsius", "degc"]),
+        ("cu in", ["ci", "cid", "cui", "cu"]), ("in2", ["sq", "sqin"]), ("deg", ["degree", "degrees"]), ("C", ["celsius", "degc"]),
         ("F", ["fahrenheit", "degf"]), ("K", ["kelvin"]),
     ];
 
