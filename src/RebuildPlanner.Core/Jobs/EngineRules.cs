@@ -3,7 +3,7 @@ using RebuildPlanner.Core.Quantities;
 
 namespace RebuildPlanner.Core.Jobs;
 
-/// <summary>How the quantities of a job file are written that are not in the list of <c>what</c>: the engine's own fields, gauges, parts.</summary>
+/// <summary>How the quantities outside the list of <c>what</c> are written: the engine's own fields, gauges, parts.</summary>
 /// <remarks>Ranges are common practice and generous, as in <see cref="WhatTable"/>: they catch slips, they do not judge.</remarks>
 public static class EngineRules
 {

@@ -15,13 +15,17 @@ internal static class WhatLines
 {
     private const double Mm3PerCc = 1000.0;
 
+    private static readonly QuantityRule FaceArea = new([QuantityKind.Area], SignWords.None, 100, 250_000);
+
+    private static readonly QuantityRule Opening = new([QuantityKind.Length, QuantityKind.Area], SignWords.None, 20, 600, 300, 300_000);
+
     public static readonly IReadOnlyList<WhatLine> All =
     [
         Of(What.Bore, "bore", Mm(20, 500), Cylinder, Metal.Block, Depth | Axis, Named.Cylinder),
         Of(What.Stroke, "stroke", Mm(15, 600), Engine, Metal.Steel),
         Of(What.Travel, "travel", Mm(15, 600), Engine, Metal.Steel),
         Of(What.Chamber, "chamber", Cc(0, 5000), Cylinder, Metal.Head, None, Named.Cylinder),
-        Of(What.ChamberOpeningArea, "chamber opening area", new([QuantityKind.Area], SignWords.None, 100, 250_000), Cylinder, Metal.Head, None, Named.Cylinder),
+        Of(What.ChamberOpeningArea, "chamber opening area", FaceArea, Cylinder, Metal.Head, None, Named.Cylinder),
         Of(What.ValveSink, "valve sink", Mm(-5, 20), Cylinder, Metal.Head, PlaceKeys.Valve, Named.Cylinder),
         Of(What.ValveHeadDiameter, "valve head diameter", Mm(8, 250), Cylinder, Metal.Steel, PlaceKeys.Valve),
         Of(What.Deck, "deck", Mm(-15, 50, SignWords.Deck), Cylinder, Metal.Block, PinEnd, Named.Cylinder),
@@ -33,7 +37,7 @@ internal static class WhatLines
         Of(What.Pocket, "pocket", Cc(0, 1000), Cylinder, Metal.Head, PlaceKeys.Valve),
         Of(What.HeadRecess, "head recess", Mm(0, 50), Cylinder, Metal.Head),
         Of(What.GasketThickness, "gasket thickness", Mm(0, 5), Head, Metal.Steel),
-        Of(What.GasketOpening, "gasket opening", new([QuantityKind.Length, QuantityKind.Area], SignWords.None, 20, 600, 300, 300_000), Head, Metal.Steel),
+        Of(What.GasketOpening, "gasket opening", Opening, Head, Metal.Steel),
         Of(What.BaseGasket, "base gasket", Mm(0, 10), Cylinder, Metal.Steel),
         Of(What.TopLandHeight, "top land height", Mm(0.5, 80), Cylinder, Metal.Piston, None, Named.PieceAllowed),
         Of(What.TopLandDiameter, "top land diameter", Mm(18, 500), Cylinder, Metal.Piston, None, Named.PieceAllowed),
@@ -78,7 +82,8 @@ internal static class WhatLines
         What what, string word, QuantityRule rule, Belongs belongs, Metal metal, PlaceKeys keys = None, Named named = Named.Nothing) =>
         new(what, word, rule, belongs, named.HasFlag(Named.Cylinder), named.HasFlag(Named.PieceAllowed), keys, metal);
 
-    private static QuantityRule Mm(double low, double high, SignWords signs = SignWords.None) => new([QuantityKind.Length], signs, low, high);
+    private static QuantityRule Mm(double low, double high, SignWords signs = SignWords.None) =>
+        new([QuantityKind.Length], signs, low, high);
 
     private static QuantityRule Cc(double low, double high, SignWords signs = SignWords.None) =>
         new([QuantityKind.Volume], signs, low * Mm3PerCc, high * Mm3PerCc);

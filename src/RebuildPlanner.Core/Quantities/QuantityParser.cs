@@ -5,6 +5,9 @@ internal static class QuantityParser
 {
     private const string BothLimits = "Both limits are written, the upper one first, as in 1.05 mm +0.05/-0.02 mm.";
 
+    private const string StrayMinus =
+        "A minus sign cannot follow a figure: a range is written 1.02..1.08 mm, limits 1.05 mm +0.05/-0.02 mm, a fraction 4 1/32 in.";
+
     public static WrittenQuantity? Parse(string text, out string? problem)
     {
         QuantityScanner scanner = new(text);
@@ -32,7 +35,7 @@ internal static class QuantityParser
         }
         else if (scanner.AtMinus)
         {
-            problem = BothLimits;
+            problem = StrayMinus;
             return null;
         }
 
@@ -107,6 +110,7 @@ internal static class QuantityParser
     private static string Leftover(string rest, string? word, LimitForm form) =>
         word is not null && SignWordTable.IsWord(word) && form == LimitForm.None
             ? $"The word comes last: write {rest} before {word}."
+            : word is "to" ? "A range is written with two points, as in 1.02..1.08 mm."
             : rest.StartsWith(':') ? "A ratio is written as one number: 10.5, not 10.5:1."
             : $"'{rest}' is not understood at the end of a quantity: leave it out.";
 }

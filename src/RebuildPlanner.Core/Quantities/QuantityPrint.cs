@@ -41,7 +41,9 @@ public static class QuantityPrint
 
     /// <summary>How many decimals figure and uncertainty are printed with; below zero, tens (−1), hundreds (−2) and so on.</summary>
     /// <param name="kind">The kind.</param>
-    /// <param name="standardUncertaintyCoherent">u, coherent unit; null, zero or without bound for none known, which gives the kind's usual step.</param>
+    /// <param name="standardUncertaintyCoherent">
+    /// u, coherent unit; null, zero or without bound where none is known, which gives the kind's usual step.
+    /// </param>
     /// <param name="system">The units printed in.</param>
     public static int Decimals(QuantityKind kind, double? standardUncertaintyCoherent, UnitSystem system)
     {
@@ -72,7 +74,8 @@ public static class QuantityPrint
         string number = Number(coherent, kind, standardUncertaintyCoherent, system);
         bool isZero = !number.Any(c => c is >= '1' and <= '9');
         string word = SignWordTable.Word(signs, isZero ? 0.0 : coherent);
-        return string.Join(' ', new[] { word.Length > 0 ? number.TrimStart('-') : number, Unit(kind, system), word }.Where(part => part.Length > 0));
+        string[] parts = [word.Length > 0 ? number.TrimStart('-') : number, Unit(kind, system), word];
+        return string.Join(' ', parts.Where(part => part.Length > 0));
     }
 
     // The last digit an ordinary gauge of the kind can show, which is the most an exact-looking figure deserves.

@@ -46,7 +46,7 @@ internal sealed class QuantityScanner(string text)
         int start = _at;
         if (!AtEnd && !char.IsAsciiDigit(Next))
         {
-            while (!AtEnd && (char.IsLetterOrDigit(Next) || Next is '°' or '²' or '³' or '^' or '"' or '″' || (Next == '/' && char.IsLetter(At(_at + 1)))))
+            while (!AtEnd && BelongsToWord())
             {
                 _at++;
             }
@@ -79,7 +79,9 @@ internal sealed class QuantityScanner(string text)
         bool negative = TakeMinus();
         string whole = TakeDigits();
         string? decimals = Next == '.' && At(_at + 1) != '.' ? TakeDecimals() : null;
-        problem = whole.Length == 0 && decimals is null ? NoNumber() : decimals is { Length: 0 } ? "A digit is wanted after the decimal point." : null;
+        problem = decimals is { Length: 0 } ? "A digit is wanted after the decimal point."
+            : whole.Length == 0 && decimals is null ? NoNumber()
+            : null;
         if (problem is not null)
         {
             return null;
@@ -91,6 +93,9 @@ internal sealed class QuantityScanner(string text)
         problem ??= DigitsIn(whole + decimals) > MostDigits ? "That is more digits than any gauge shows: fifteen at most." : Follower();
         return problem is null ? new(text[start.._at], negative ? -value : value, step) : null;
     }
+
+    private bool BelongsToWord() => char.IsLetterOrDigit(Next) || Next is '°' or '²' or '³' or '^' or '"' or '″'
+        || (Next == '/' && char.IsLetter(At(_at + 1)));
 
     private string NoNumber() => Next == '+'
         ? "A figure is written without a plus sign."

@@ -11,7 +11,8 @@ internal static class SaneRange
         bool valueFits = Fits(units.Coherent(figure.Value), low, high);
 
         // The doubt of a small figure may reach across zero where zero is the least sane value; anything else out of range is a slip.
-        bool limitsFit = (low == 0.0 || Fits(units.Coherent(figure.Low), low, high)) && Fits(units.Coherent(figure.High), Math.Min(low, 0.0), high);
+        bool lowFits = low == 0.0 || Fits(units.Coherent(figure.Low), low, high);
+        bool limitsFit = lowFits && Fits(units.Coherent(figure.High), low, high);
         if (valueFits && limitsFit)
         {
             return null;
@@ -21,7 +22,7 @@ internal static class SaneRange
         string bounds = $"{Bound(low, units, rule.Signs)} to {Bound(high, units, rule.Signs)}";
         if (valueFits || written.Form == LimitForm.Range)
         {
-            string reach = $"{Short(InUnit(units.Coherent(figure.Low), units))}{unit} to {Short(InUnit(units.Coherent(figure.High), units))}{unit}";
+            string reach = $"{Bound(units.Coherent(figure.Low), units, rule.Signs)} to {Bound(units.Coherent(figure.High), units, rule.Signs)}";
             return $"The limits {reach} reach outside {bounds}, which looks like a slip.";
         }
 

@@ -7,7 +7,7 @@ internal static class SignRule
     public static string? Problem(WrittenQuantity written, QuantityKind kind, QuantityRule rule)
     {
         IReadOnlyList<string> words = SignWordTable.Words(rule.Signs);
-        bool negative = written.Value.Number.Text[0] is '-' or '−' || (written.Form == LimitForm.Range && written.First.Number.Text[0] is '-' or '−');
+        bool negative = IsNegative(written.Value.Number) || (written.Form == LimitForm.Range && IsNegative(written.First.Number));
         if (written.Word is { } word && !words.Contains(word))
         {
             return Misplaced(word, words);
@@ -15,10 +15,12 @@ internal static class SignRule
 
         if (written.Word is null && words.Count > 0 && (negative || rule.Signs != SignWords.Protrusion))
         {
-            string example = UnitTable.Usual(kind) is [{ } unit, ..] ? $"{written.Value.Number.Text.TrimStart('-', '−')} {written.Value.Unit ?? unit.Word}" : "";
+            string unit = written.Value.Unit ?? UnitTable.Usual(kind).Select(usual => usual.Word).FirstOrDefault("");
+            string example = $"{written.Value.Number.Text.TrimStart('-', '−')} {unit}";
+            string likely = SignWordTable.Word(rule.Signs, (double)written.Value.Number.Value);
             return negative
                 ? $"A word says which way, not a minus sign: {UnitRule.Listed(words)}, as in {example} {words[1]}."
-                : $"It must end with {UnitRule.Listed(words)}, as in {example} {words[0]}.";
+                : $"It must end with {UnitRule.Listed(words)}, as in {example} {likely}.";
         }
 
         return !negative ? null
@@ -46,6 +48,9 @@ internal static class SignRule
             ? $"{word} is written with zero only: end with {words[0]} or {words[1]}."
             : null;
     }
+
+    // The sign as typed: minus zero is a slip too.
+    private static bool IsNegative(WrittenNumber number) => number.Text[0] is '-' or '−';
 
     private static string Misplaced(string word, IReadOnlyList<string> words)
     {

@@ -36,15 +36,16 @@ internal static class UnitRule
 
         WrittenUnit? second = found[2], first = found[1] ?? second, value = found[0] ?? first;
         units = new(value!.Kind, value, first ?? value, second ?? value);
-        bool bareLimit = (IsWritten(written, 1) && first is null && written.First.Number.Value != 0m)
-            || (IsWritten(written, 2) && second is null && written.Second.Number.Value != 0m);
-        return bareLimit ? $"The limit needs its unit too, as in 0.03 {value.Word}." : OneKind(units);
+        WrittenNumber? bare = first is null && written.Form != LimitForm.None && written.First.Number.Value != 0m ? written.First.Number
+            : second is null && written.Form == LimitForm.UpperLower && written.Second.Number.Value != 0m ? written.Second.Number
+            : null;
+        return bare is { } number ? $"The limit needs its unit too: write {number.Text} {value.Word}." : OneKind(units);
     }
 
-    /// <summary>A wanted kind with its usual units: "a volume is wanted here: cc, mL or cu in".</summary>
-    public static string Wanted(QuantityRule rule) => string.Join(" or ", rule.Kinds.Select(kind => kind == QuantityKind.Ratio
-        ? "a bare number is wanted here, without a unit"
-        : $"{Name(kind)} is wanted here: {Listed([.. UnitTable.Usual(kind).Select(unit => unit.Word)])}"));
+    /// <summary>The kinds wanted with their usual units, opening a sentence: "a volume is wanted here: cc, mL or cu in".</summary>
+    public static string Wanted(QuantityRule rule) => rule.Kinds is [{ } only]
+        ? only == QuantityKind.Ratio ? "a bare number is wanted here, without a unit" : $"{Name(only)} is wanted here: {Units(only)}"
+        : $"{string.Join(" or ", rule.Kinds.Select(kind => $"{Name(kind)} ({Units(kind)})"))} is wanted here";
 
     public static string Listed(IReadOnlyList<string> words) =>
         words.Count < 2 ? string.Concat(words) : string.Join(", ", words.SkipLast(1)) + " or " + words[^1];
@@ -59,7 +60,9 @@ internal static class UnitRule
 
         if (SignWordTable.IsWord(word))
         {
-            return rule.Kinds.Contains(QuantityKind.Ratio) ? $"No closing word belongs here: leave {word} out." : Missing(written.Value.Number, rule);
+            return rule.Kinds.Contains(QuantityKind.Ratio)
+                ? $"No closing word belongs here: leave {word} out."
+                : Missing(written.Value.Number, rule);
         }
 
         return UnitTable.Nearest(word, rule.Kinds) is { } nearest && UnitTable.Find(nearest) is { } near && rule.Kinds.Contains(near.Kind)
@@ -73,13 +76,14 @@ internal static class UnitRule
         return $"The unit is missing: write {Listed(ways)}.";
     }
 
+    private static string Units(QuantityKind kind) => Listed([.. UnitTable.Usual(kind).Select(unit => unit.Word)]);
+
     private static string? OneKind(SettledUnits units) =>
         units.First!.Kind == units.Kind && units.Second!.Kind == units.Kind
             ? null
-            : $"A figure and its limits are of one kind: {Name(units.Kind)} cannot have {Name(units.First.Kind != units.Kind ? units.First.Kind : units.Second!.Kind)} as its limit.";
+            : $"A figure and its limits are of one kind: {Name(units.Kind)} cannot have {Name(OtherKind(units))} as its limit.";
 
-    private static bool IsWritten(WrittenQuantity written, int part) =>
-        part == 1 ? written.Form != LimitForm.None : written.Form == LimitForm.UpperLower;
+    private static QuantityKind OtherKind(SettledUnits units) => units.First!.Kind != units.Kind ? units.First.Kind : units.Second!.Kind;
 
     private static string Name(QuantityKind kind) => kind switch
     {

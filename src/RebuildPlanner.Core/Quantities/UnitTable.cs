@@ -44,19 +44,19 @@ internal static class UnitTable
     private static readonly Dictionary<string, WrittenUnit> BySpelling = All.ToDictionary(unit => unit.Word, StringComparer.Ordinal);
 
     // Refused, so that one unit is not written in ten ways, but what they stand for is known.
-    private static readonly Dictionary<string, string> LongNames = new(StringComparer.OrdinalIgnoreCase)
-    {
-        ["inch"] = "in", ["inches"] = "in", ["ins"] = "in", ["micron"] = "µm", ["microns"] = "µm", ["thousandth"] = "thou",
-        ["feet"] = "ft", ["foot"] = "ft", ["metre"] = "m", ["meter"] = "m", ["millimetre"] = "mm", ["millimeter"] = "mm", ["litre"] = "L",
-        ["liter"] = "L", ["ccm"] = "cc", ["ci"] = "cu in", ["cid"] = "cu in", ["cui"] = "cu in", ["degree"] = "deg", ["degrees"] = "deg",
-        ["celsius"] = "C", ["fahrenheit"] = "F", ["degC"] = "C", ["degF"] = "F", ["kelvin"] = "K", ["sq"] = "in2", ["sqin"] = "in2",
-    };
+    private static readonly (string Word, string[] LongNames)[] Advice =
+    [
+        ("in", ["inch", "inches", "ins"]), ("µm", ["micron", "microns"]), ("thou", ["thousandth", "thousandths"]), ("ft", ["foot", "feet"]),
+        ("m", ["metre", "meter"]), ("mm", ["millimetre", "millimeter"]), ("L", ["litre", "liter"]), ("cc", ["ccm"]),
+        ("cu in", ["ci", "cid", "cui", "cu"]), ("in2", ["sq", "sqin"]), ("deg", ["degree", "degrees"]), ("C", ["celsius", "degc"]),
+        ("F", ["fahrenheit", "degf"]), ("K", ["kelvin"]),
+    ];
 
     public static WrittenUnit? Find(string spelling) => BySpelling.GetValueOrDefault(spelling);
 
     /// <summary>The unit that was probably meant, the kinds wanted at the place first.</summary>
     public static string? Nearest(string typed, IReadOnlyList<QuantityKind> wanted) =>
-        LongNames.GetValueOrDefault(typed)
+        Advice.FirstOrDefault(advice => advice.LongNames.Contains(typed.ToLowerInvariant())).Word
         ?? NearestWord.Of(typed, All.Where(unit => wanted.Contains(unit.Kind)).Select(unit => unit.Word))
         ?? NearestWord.Of(typed, BySpelling.Keys);
 

@@ -3,7 +3,7 @@ namespace RebuildPlanner.Core.Quantities;
 /// <summary>One spelling of a unit and its way to the working unit: mm, mm², mm³, deg, kPa, °C, kJ/kg.</summary>
 /// <remarks>
 /// Figures stay decimal until every sum of a limit is made, so that 1.05 mm + 0.05 mm is the double nearest to 1.10 and not its neighbour.
-/// A factor is exact by definition in nearly every unit of the trade, and rounding the library's double to fifteen digits gives it back exactly.
+/// Nearly every factor of the trade is exact by definition, and rounding the library's double to fifteen digits gives it back exactly.
 /// </remarks>
 internal sealed class WrittenUnit
 {
