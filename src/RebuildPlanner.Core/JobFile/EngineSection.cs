@@ -52,7 +52,8 @@ internal static class EngineSection
         Layout? written = engine.Word("layout", JobWords.Layouts);
         if (written == Layout.Single && cylinders > 1)
         {
-            engine.Faults.Add(engine.Take("layout")!, $"'single' is one cylinder, and 'cylinders' says {cylinders}; write inline, vee or flat");
+            engine.Faults.Add(
+                engine.Take("layout")!, $"'single' is one cylinder, and 'cylinders' says {cylinders}; write inline, vee or flat");
         }
         else if (written == Layout.Vee && cylinders == 1)
         {

@@ -19,7 +19,7 @@ internal sealed class Fields
             {
                 faults.Add(
                     field.Spot, node.PathOf(field.Name), field.Value?.Shown,
-                    $"the field '{JsonTree.Short(field.Name)}' stands twice here, first on line {_written[field.Name].Spot.Line}; keep one");
+                    $"the field '{JsonTree.Short(field.Name)}' stands here twice, first on line {_written[field.Name].Spot.Line}; keep one");
             }
         }
     }
@@ -158,8 +158,21 @@ internal sealed class Fields
     }
 
     /// <summary>A bare JSON number.</summary>
-    public double? Number(string name, string right, bool required = false) =>
-        Take(name, required) is { } value && Is(value, JsonKind.Number, right + ", without quotes") ? NumberIn(value) : null;
+    public double? Number(string name, string right, bool required = false)
+    {
+        if (Take(name, required) is not { } value || !Is(value, JsonKind.Number, right + ", without quotes"))
+        {
+            return null;
+        }
+
+        double? number = NumberIn(value);
+        if (number is null)
+        {
+            Faults.Add(value, $"this must be {right}");
+        }
+
+        return number;
+    }
 
     /// <summary>The number a JSON number or a text says, or null where it says none.</summary>
     public static double? NumberIn(JsonTree value) =>

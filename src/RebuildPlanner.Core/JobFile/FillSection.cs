@@ -5,7 +5,8 @@ using RebuildPlanner.Core.Quantities;
 
 namespace RebuildPlanner.Core.JobFile;
 
-/// <summary>Reads what a burette delivered: <c>from</c> and <c>to</c> on the reading itself, or several <c>fills</c>; exactly one of these and <c>value</c>.</summary>
+/// <summary>Reads what a burette delivered: <c>from</c> and <c>to</c> on the reading itself, or several <c>fills</c>.</summary>
+/// <remarks>A reading has exactly one of these two and <c>value</c>.</remarks>
 internal static class FillSection
 {
     private const double Mm3PerCc = 1000.0;
@@ -77,7 +78,8 @@ internal static class FillSection
 
         if (to.Value < from.Value)
         {
-            fields.Faults.Add(fields.Take("to")!, $"a fill ends at or above where it began, {from.Text}; write the reading before as 'from' and after as 'to'");
+            fields.Faults.Add(
+                fields.Take("to")!, $"a fill ends at or above where it began, {from.Text}; 'from' is the mark before it and 'to' the one after");
         }
 
         return new(from, to);
@@ -102,15 +104,18 @@ internal static class FillSection
     private static void CheckSum(Fields reading, WhatLine line, List<Fill> fills)
     {
         double sumMm3 = fills.Sum(fill => fill.To.Value - fill.From.Value);
-        bool judged = line.Rule.Signs == SignWords.None && line.Rule.Kinds.Contains(QuantityKind.Volume) && fills.All(fill => fill.To.Value >= fill.From.Value);
+        bool judged = line.Rule.Signs == SignWords.None && line.Rule.Kinds.Contains(QuantityKind.Volume)
+            && fills.All(fill => fill.To.Value >= fill.From.Value);
         if (judged && (sumMm3 < line.Rule.SaneLow || sumMm3 > line.Rule.SaneHigh))
         {
             string field = reading.Take("fills") is not null ? "fills" : "to";
+            string range = string.Create(
+                CultureInfo.InvariantCulture, $"{line.Rule.SaneLow / Mm3PerCc:0.###} to {line.Rule.SaneHigh / Mm3PerCc:0.###} cc");
             reading.Faults.Add(
                 reading.Take(field)!,
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{sumMm3 / Mm3PerCc:0.###} cc in all is not a {line.Word} that can be ({line.Rule.SaneLow / Mm3PerCc:0.###} to {line.Rule.SaneHigh / Mm3PerCc:0.###} cc); look for a slip"));
+                    $"{sumMm3 / Mm3PerCc:0.###} cc in all is not a {line.Word} that can be ({range}); look for a slip"));
         }
     }
 }

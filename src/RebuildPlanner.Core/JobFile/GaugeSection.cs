@@ -115,13 +115,15 @@ internal static class GaugeSection
 
         // Reported on every gauge of the ring, each being where it can be broken; a gauge merely hung on a ring is not to blame.
         HashSet<string> seen = [];
-        for (string? id = first; id is not null && byId.TryGetValue(id, out (Gauge Gauge, Fields Fields) next) && seen.Add(id); id = next.Gauge.SetWith)
+        string? id = first;
+        while (id is not null && id != gauge.Id && seen.Add(id) && byId.TryGetValue(id, out (Gauge Gauge, Fields Fields) next))
         {
-            if (id == gauge.Id)
-            {
-                fields.Faults.Add(place, $"'{gauge.Id}' comes to be set with itself; one gauge of the ring is set with something outside it");
-                return;
-            }
+            id = next.Gauge.SetWith;
+        }
+
+        if (id == gauge.Id)
+        {
+            fields.Faults.Add(place, $"'{gauge.Id}' comes to be set with itself; one gauge of the ring is set with something outside it");
         }
     }
 }

@@ -11,7 +11,7 @@ internal enum JsonKind
     Nothing,
 }
 
-/// <summary>One value of a JSON text that still knows where it stood, so that whatever is wrong with it can be shown to the one who typed it.</summary>
+/// <summary>One value of a JSON text that still knows where it stood, so that what is wrong can be shown to the one who typed it.</summary>
 /// <remarks>The framework's own document drops positions once parsed; a fault without its line sends the reader hunting.</remarks>
 internal sealed class JsonTree
 {

@@ -63,7 +63,8 @@ internal ref struct JsonTreeReader
         catch (InvalidOperationException)
         {
             // The framework finds half a surrogate pair only when the text is asked for.
-            return new(_spot.Line, Place(), null, "the text holds half a character (a lone \\uD800..\\uDFFF escape); write the character itself");
+            return new(
+                _spot.Line, Place(), null, "the text holds half a character (a lone \\uD800..\\uDFFF escape); write the character itself");
         }
     }
 
@@ -131,7 +132,8 @@ internal ref struct JsonTreeReader
         JsonTree open = _open.Peek();
         if (_field is { } field)
         {
-            return $"after \"{JsonTree.Short(field.Name)}\" a colon and a value were expected (text in double quotes, a number, true, false, null, {{ or [)";
+            return $"after \"{JsonTree.Short(field.Name)}\" a colon and a value were expected: "
+                + "text in double quotes, a number, true, false, null, an object or a list";
         }
 
         string begun = $"opened on line {open.Spot.Line}";

@@ -64,14 +64,14 @@ internal static class LimitSection
 
     private static double? ReadLevel(Fields fields)
     {
-        const string right = "a level is a number above 0.5 and below 1, such as 0.95";
-        if (fields.Number("level", right) is { } level && level is not (> LeastLevel and < 1.0))
+        const string right = "a number above 0.5 and below 1, such as 0.95";
+        double? level = fields.Number("level", right);
+        if (level is <= LeastLevel or >= 1.0)
         {
-            fields.Faults.Add(fields.Take("level")!, right);
-            return null;
+            fields.Faults.Add(fields.Take("level")!, $"this must be {right}");
         }
 
-        return fields.Take("level") is { Kind: JsonKind.Number } written ? Fields.NumberIn(written) : null;
+        return level;
     }
 
     private static Place ReadPlace(Fields fields, Subject subject, Known known)

@@ -18,15 +18,16 @@ internal static class ReadingSection
                 continue;
             }
 
-            if (WhatSection.Read(fields) is { } line)
-            {
-                readings.Add(new(ReadOne(fields, line, known), item));
-                fields.Close();
-            }
-
-            if (fields.Label("id") is { } id && !ids.Add(id))
+            string? id = fields.Label("id");
+            if (id is not null && !ids.Add(id))
             {
                 file.Faults.Add(fields.Take("id")!, $"'{id}' is the id of another reading already; each id once");
+            }
+
+            if (WhatSection.Read(fields) is { } line)
+            {
+                readings.Add(new(ReadOne(fields, line, known) with { Id = id }, item));
+                fields.Close();
             }
         }
 
@@ -52,9 +53,8 @@ internal static class ReadingSection
             fields.Flag("torquePlate"),
             fields.Word("stage", JobWords.Stages),
             ReadStruck(fields),
-            fields.Label("id"),
-            fields.Text("by"),
-            Dates.Moment(fields, "when"));
+            By: fields.Text("by"),
+            When: Dates.Moment(fields, "when"));
         CheckGauge(fields, reading, known.Gauge(reading.Gauge));
         return reading;
     }
@@ -79,7 +79,8 @@ internal static class ReadingSection
         if (read is { } of && gauged is { } by && of != by && of != QuantityKind.Area)
         {
             fields.Faults.Add(
-                fields.Take("gauge")!, $"gauge '{gauge!.Id}' reads a {Named(by)} and this reading is a {Named(of)}; name the gauge it was read with");
+                fields.Take("gauge")!,
+                $"gauge '{gauge!.Id}' reads a {Named(by)} and this reading is a {Named(of)}; name the gauge it was read with");
         }
     }
 

@@ -24,7 +24,8 @@ internal static class StatedSection
     {
         if (line.What == What.CrownFill)
         {
-            fields.Faults.Add(fields.Take("what")!, "a crown fill is measured with its drop; what is given or assumed is the crown, such as \"4.2 cc dish\"");
+            fields.Faults.Add(
+                fields.Take("what")!, "a crown fill is measured with its drop; what is given or assumed is the crown, such as \"4.2 cc dish\"");
         }
 
         Place place = PlaceSection.Read(fields, line, known);

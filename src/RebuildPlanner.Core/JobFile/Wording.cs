@@ -7,6 +7,9 @@ internal static class Wording
 {
     private const int LongestList = 30;
 
+    // Where nothing typed comes near, even the whole list of what is better than no answer.
+    private const int LongestListAlone = 60;
+
     // A nearest name among hundreds, asked for once a fault, would make a broken file slower than a whole one.
     private const int MostCandidates = 200;
     private const int LongestTypo = 60;
@@ -19,10 +22,12 @@ internal static class Wording
             message += $"; did you mean '{nearest}'?";
         }
 
+        bool suggested = message.EndsWith('?');
         return known.Count switch
         {
-            0 => message + "; there is none here",
-            <= LongestList => message + $" Known: {Listed(known)}",
+            0 => message + "; there is none to name here",
+            <= LongestList => $"{message}{(suggested ? " Known: " : "; known: ")}{Listed(known)}",
+            <= LongestListAlone when !suggested => $"{message}; known: {Listed(known)}",
             _ => message,
         };
     }
