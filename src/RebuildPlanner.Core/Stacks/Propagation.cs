@@ -1,0 +1,117 @@
+using RebuildPlanner.Core.Measuring;
+using RebuildPlanner.Core.Numerics;
+
+namespace RebuildPlanner.Core.Stacks;
+
+/// <summary>The law of propagation on rows of sensitivities to a model's sources. Nothing here allocates.</summary>
+public static class Propagation
+{
+    /// <summary>The covariance of two figures, in the product of their units.</summary>
+    /// <param name="sources">The model's sources, u in the unit of what each acts on.</param>
+    /// <param name="a">The row of one figure, its unit per unit of each source.</param>
+    /// <param name="b">The row of the other.</param>
+    /// <remarks>
+    /// cov(a, b) = Σ a_s·b_s·u_s²; there are no cross terms, since what correlates two figures is a source they share.
+    /// Source: jcgm100 (F.1.2.3). Valid for: figures linear over the sources' spread. Error: rounding.
+    /// </remarks>
+    public static double Covariance(ReadOnlySpan<Source> sources, ReadOnlySpan<double> a, ReadOnlySpan<double> b)
+    {
+        double sum = 0.0;
+        for (int s = 0; s < sources.Length; s++)
+        {
+            double u = sources[s].StandardUncertainty;
+            sum += a[s] * b[s] * u * u;
+        }
+
+        return sum;
+    }
+
+    /// <summary>The combined standard uncertainty of a figure, in its unit.</summary>
+    /// <param name="sources">The model's sources.</param>
+    /// <param name="row">The figure's row.</param>
+    /// <remarks>u = √cov(row, row). Source: jcgm100 (5.1.2). Valid for: figures linear over the sources' spread. Error: rounding.</remarks>
+    public static double StandardUncertainty(ReadOnlySpan<Source> sources, ReadOnlySpan<double> row) =>
+        Math.Sqrt(Covariance(sources, row, row));
+
+    /// <summary>Adds an estimate's doubts, times a factor, to a row in the figure's unit per unit of each source.</summary>
+    /// <param name="row">The row that is added to.</param>
+    /// <param name="estimate">The estimate whose terms are added.</param>
+    /// <param name="factor">The figure's sensitivity to the estimate.</param>
+    /// <remarks>row_s += factor·c_s, the chain rule. Source: jcgm100 (5.1.3). Valid for: every row. Error: rounding.</remarks>
+    public static void AddTo(Span<double> row, Estimate estimate, double factor)
+    {
+        for (int i = 0; i < estimate.Terms.Count; i++)
+        {
+            Term term = estimate.Terms[i];
+            row[term.Source] += factor * term.Coefficient;
+        }
+    }
+
+    /// <summary>The effective degrees of freedom of a figure, a number ≥ 1, ∞ where no part has finitely many.</summary>
+    /// <param name="sources">The model's sources.</param>
+    /// <param name="row">The figure's row.</param>
+    /// <remarks>
+    /// ν_eff = u⁴/Σ(u_i⁴/ν_i), all terms of a pool being one part u_i: they were judged from the same s, so their errors do not average out.
+    /// Source: jcgm100 (G.4.1). Valid for: independent parts. Error: the formula is itself an approximation.
+    /// </remarks>
+    public static double EffectiveDegreesOfFreedom(ReadOnlySpan<Source> sources, ReadOnlySpan<double> row)
+    {
+        double variance = 0.0, sum = 0.0;
+        for (int s = 0; s < sources.Length; s++)
+        {
+            double own = Variance(sources[s], row[s]);
+            variance += own;
+            if (own == 0.0 || double.IsPositiveInfinity(sources[s].DegreesOfFreedom))
+            {
+                continue;
+            }
+
+            // A pool's terms are gathered where its first one stands.
+            if (sources[s].Pool >= 0)
+            {
+                if (StandsEarlier(sources[..s], row, sources[s].Pool))
+                {
+                    continue;
+                }
+
+                for (int other = s + 1; other < sources.Length; other++)
+                {
+                    own += sources[other].Pool == sources[s].Pool ? Variance(sources[other], row[other]) : 0.0;
+                }
+            }
+
+            sum += own * own / sources[s].DegreesOfFreedom;
+        }
+
+        return sum == 0.0 ? double.PositiveInfinity : variance * variance / sum;
+    }
+
+    /// <summary>The factor k by which u is multiplied for an interval of the given coverage, without unit.</summary>
+    /// <param name="effectiveDegreesOfFreedom">ν_eff, ≥ 1; a part of one is left off.</param>
+    /// <param name="coverage">The probability wanted, between 0 and 1.</param>
+    /// <remarks>
+    /// k = t_p(ν_eff), ν_eff truncated. For the method notes and the standard's own examples: with a dominant rectangular part k·u may pass the
+    /// worst case, so results use <see cref="LinearSum"/>. Source: jcgm100 (G.4.1, G.6.4). Valid for: a nearly normal sum. Error: see there.
+    /// </remarks>
+    public static double CoverageFactor(double effectiveDegreesOfFreedom, double coverage = 0.95) =>
+        StudentT.Quantile(0.5 + (0.5 * coverage), Math.Truncate(effectiveDegreesOfFreedom));
+
+    private static double Variance(in Source source, double coefficient)
+    {
+        double u = coefficient * source.StandardUncertainty;
+        return u * u;
+    }
+
+    private static bool StandsEarlier(ReadOnlySpan<Source> earlier, ReadOnlySpan<double> row, int pool)
+    {
+        for (int s = 0; s < earlier.Length; s++)
+        {
+            if (earlier[s].Pool == pool && Variance(earlier[s], row[s]) != 0.0)
+            {
+                return true;
+            }
+        }
+
+        return false;
+    }
+}
