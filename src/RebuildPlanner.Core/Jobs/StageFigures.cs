@@ -128,7 +128,7 @@ public sealed class StageFigures
         double halfWidth = new LinearSum(_model.Model.Sources, row).HalfWidth(StageResults.Coverage);
         double least = neverNegative ? 0.0 : double.NegativeInfinity;
         return new ResultQuantity(
-            figure.Value, kind, Propagation.StandardUncertainty(_model.Model.Variances, row), Math.Max(least, figure.Value - halfWidth),
+            figure.Value, kind, Propagation.StandardUncertainty(_model.Model.Sources, row), Math.Max(least, figure.Value - halfWidth),
             figure.Value + halfWidth, Math.Max(least, figure.Worst.Low), figure.Worst.High);
     }
 

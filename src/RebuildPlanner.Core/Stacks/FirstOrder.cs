@@ -158,7 +158,7 @@ public sealed class FirstOrder
         {
             for (int other = 0; other <= cylinder; other++)
             {
-                double covariance = Propagation.Covariance(_model.Variances, RowSpan(cylinder, output), RowSpan(other, output));
+                double covariance = Propagation.Covariance(_model.Sources, RowSpan(cylinder, output), RowSpan(other, output));
                 _covariances[(((output * _cylinders) + cylinder) * _cylinders) + other] = covariance;
                 _covariances[(((output * _cylinders) + other) * _cylinders) + cylinder] = covariance;
             }
