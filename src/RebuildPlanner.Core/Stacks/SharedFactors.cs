@@ -125,7 +125,8 @@ internal sealed class SharedFactors
             factors.AddRange((join ? [.. Joined(weights, lines.Length)] : weights).Select(weight => new Factor(group.Key.Kind, lines, weight)));
         }
 
-        return [.. factors.OrderByDescending(factor => factor.Lines.Select((line, i) => factor.Weights[i] * factor.Weights[i] / variances[line]).Sum())];
+        return [.. factors.OrderByDescending(
+            factor => factor.Lines.Select((line, i) => factor.Weights[i] * factor.Weights[i] / variances[line]).Sum())];
     }
 
     /// <summary>The columns of the Cholesky factor of Σ w·wᵀ; a pivot that is nothing but rounding has no column.</summary>
