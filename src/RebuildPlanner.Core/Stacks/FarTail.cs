@@ -3,7 +3,7 @@ namespace RebuildPlanner.Core.Stacks;
 /// <summary>The tail so far out that only the pools' t laws reach there, each shifted a little by all the rest.</summary>
 /// <remarks>
 /// Σ over pools of the mean of the pool's own tail at d − w, w drawn from the rest of the sum by the three-point rule with the rest's variance and
-/// fourth moment: one large part makes a heavy-tailed sum large. Valid for: d ≥ 10 σ of the rest + 30 scales. Error: 1e-7.
+/// fourth moment: one large part makes a heavy-tailed sum large. Valid for: d ≥ 7 σ of the rest and 10 + 40/ν scales. Error: 1e-7.
 /// </remarks>
 internal sealed class FarTail
 {

@@ -43,19 +43,18 @@ internal sealed class InvertedTail : UpperTail
             variance += halfWidth * halfWidth / 3.0;
         }
 
-        double pooled = 0.0, pooledVariance = 0.0, pooledPhase = 0.0;
-        int heavy = 0;
+        // Two heavy tails mix: the sum of their own tails is right to 1e-7 only from 150 scales on. One alone, or lighter ones, are so much sooner.
+        bool heavy = parts.Pools.Count(pool => pool.DegreesOfFreedom <= 2.0) > 1;
+        double pooledReach = 0.0, pooledVariance = 0.0, pooledPhase = 0.0;
         foreach ((double scale, double degreesOfFreedom) in parts.Pools)
         {
-            pooled += scale;
+            pooledReach += scale * (heavy ? 150.0 : 10.0 + (40.0 / degreesOfFreedom));
             pooledVariance += scale * scale;
             pooledPhase += scale * Math.Min(6.0, Math.Sqrt(degreesOfFreedom));
-            heavy += degreesOfFreedom <= 2.0 ? 1 : 0;
         }
 
-        // Two heavy tails mix: the sum of their own tails is right to 1e-7 only from 150 scales on, one alone from 30.
-        _far = pooled > 0.0
-            ? (10.0 * Math.Sqrt(variance)) + ((heavy > 1 ? 150.0 : 30.0) * pooled)
+        _far = pooledReach > 0.0
+            ? (7.0 * Math.Sqrt(variance)) + pooledReach
             : Math.Min(widths + (6.5 * parts.StandardDeviation), 11.0 * Math.Sqrt(variance));
         _near = Math.Min(_far, 3.0 * Math.Sqrt(variance + pooledVariance));
         _span = widths + (6.0 * parts.StandardDeviation) + pooledPhase;

@@ -158,12 +158,13 @@ public sealed class LinearSum
         return apart;
     }
 
-    private static UpperTail TailOf(Components rest, ReadOnlySpan<double> apart) => (rest.HalfWidths.Length, rest.StandardDeviation, rest.Pools) switch
-    {
-        (0, 0.0, []) => new NoTail(),
-        (1, 0.0, []) => new RectangleTail(rest.HalfWidths[0]),
-        (0, _, []) => new NormalTail(rest.StandardDeviation),
-        (0, 0.0, [var pool]) => new StudentTail(pool.Scale, pool.DegreesOfFreedom),
-        _ => new InvertedTail(rest, apart),
-    };
+    private static UpperTail TailOf(Components rest, ReadOnlySpan<double> apart) =>
+        (rest.HalfWidths.Length, rest.StandardDeviation, rest.Pools) switch
+        {
+            (0, 0.0, []) => new NoTail(),
+            (1, 0.0, []) => new RectangleTail(rest.HalfWidths[0]),
+            (0, _, []) => new NormalTail(rest.StandardDeviation),
+            (0, 0.0, [var pool]) => new StudentTail(pool.Scale, pool.DegreesOfFreedom),
+            _ => new InvertedTail(rest, apart),
+        };
 }

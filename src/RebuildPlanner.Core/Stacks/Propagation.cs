@@ -90,11 +90,12 @@ public static class Propagation
     /// <param name="effectiveDegreesOfFreedom">ν_eff, ≥ 1; a part of one is left off.</param>
     /// <param name="coverage">The probability wanted, between 0 and 1.</param>
     /// <remarks>
-    /// k = t_p(ν_eff), ν_eff truncated. For the method notes and the standard's own examples: with a dominant rectangular part k·u may pass the
-    /// worst case, so results use <see cref="LinearSum"/>. Source: jcgm100 (G.4.1, G.6.4). Valid for: a nearly normal sum. Error: see there.
+    /// k = t_p(ν_eff), ν_eff rounded to two decimals and then truncated: the standard's own 18.999 is its 19.0. For the method notes and the
+    /// standard's own examples: with a dominant rectangular part k·u may pass the worst case, so results use <see cref="LinearSum"/>.
+    /// Source: jcgm100 (G.4.1, G.6.4). Valid for: a nearly normal sum. Error: see there.
     /// </remarks>
     public static double CoverageFactor(double effectiveDegreesOfFreedom, double coverage = 0.95) =>
-        StudentT.Quantile(0.5 + (0.5 * coverage), Math.Truncate(effectiveDegreesOfFreedom));
+        StudentT.Quantile(0.5 + (0.5 * coverage), Math.Truncate(Math.Round(effectiveDegreesOfFreedom, 2)));
 
     private static double Variance(in Source source, double coefficient)
     {
