@@ -9,6 +9,7 @@ internal sealed class Fields
 {
     private readonly Dictionary<string, JsonField> _written = [];
     private readonly List<string> _known = [];
+    private readonly HashSet<string> _refused = [];
 
     private Fields(JsonTree node, FaultList faults)
     {
@@ -60,6 +61,7 @@ internal sealed class Fields
     /// <summary>The value of a field that has no business here: known by name, so the answer can say why.</summary>
     public void Refuse(string name, string why)
     {
+        _refused.Add(name);
         if (Take(name) is { } value)
         {
             Faults.Add(value, why);
@@ -197,7 +199,7 @@ internal sealed class Fields
     {
         foreach (JsonField field in _written.Values.Where(field => !_known.Contains(field.Name)))
         {
-            string[] left = [.. _known.Distinct().Where(known => known == field.Name || !_written.ContainsKey(known))];
+            string[] left = [.. _known.Distinct().Where(known => !_written.ContainsKey(known) && !_refused.Contains(known))];
             Faults.Add(field.Spot, Node.PathOf(field.Name), field.Value?.Shown, Wording.Unknown("field", field.Name, left));
         }
     }

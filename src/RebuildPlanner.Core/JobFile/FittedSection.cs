@@ -37,7 +37,11 @@ internal static class FittedSection
             fields.Faults.Add(fields.Take("piece")!, $"piece '{piece}' is of the set '{owner}', not of '{piston}'");
         }
 
-        if (piece is not null && fields.Take("cylinder") is null)
+        if (known.Cylinders.Names is [string only])
+        {
+            cylinder ??= piece is null ? null : only;
+        }
+        else if (piece is not null && fields.Take("cylinder") is null)
         {
             fields.Missing("cylinder", $"one piece goes into one cylinder; say which takes '{piece}'");
         }

@@ -139,7 +139,7 @@ internal ref struct JsonTreeReader
         string begun = $"opened on line {open.Spot.Line}";
         return open.Kind == JsonKind.List
             ? $"a value, a comma between two values, or the ] of the list {begun} was expected"
-            : $"a field name in double quotes, a comma between two fields, or the }} of the object {begun} was expected";
+            : $"a field name in double quotes and a colon, a comma between two fields, or the }} of the object {begun} was expected";
     }
 
     private static int LineOfBadByte(ReadOnlySpan<byte> utf8)

@@ -25,7 +25,7 @@ internal static class Wording
         bool suggested = message.EndsWith('?');
         return known.Count switch
         {
-            0 => message + "; there is none to name here",
+            0 => message + $"; no other {noun} is known here",
             <= LongestList => $"{message}{(suggested ? " Known: " : "; known: ")}{Listed(known)}",
             <= LongestListAlone when !suggested => $"{message}; known: {Listed(known)}",
             _ => message,

@@ -56,6 +56,19 @@ public class FaultTests
     }
 
     [Fact]
+    public void A_field_that_would_be_refused_here_is_not_offered()
+    {
+        string text = JobFiles.With(
+            (JobFiles.ReadingsLine, """ "readings": [ { "what": "bore", "cylinder": "1", "value": "84 mm", "colour": "red" } ],"""));
+
+        string message = Assert.Single(JobFiles.Read(text).Faults).Message;
+
+        Assert.Contains("axis", message, StringComparison.Ordinal);
+        Assert.DoesNotContain("piece", message, StringComparison.Ordinal);
+        Assert.DoesNotContain("drop", message, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void A_later_version_is_the_only_thing_said()
     {
         string text = JobFiles.With((JobFiles.VersionLine, "\"version\": 3,"), (JobFiles.NotesLine, "\"notes\": 5"));

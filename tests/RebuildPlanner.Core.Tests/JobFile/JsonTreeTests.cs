@@ -8,7 +8,7 @@ public class JsonTreeTests
     [Theory]
     [InlineData("", 1, "", "the file must be one object")]
     [InlineData("{\n\"a\": }", 2, "a", "after \"a\" a colon and a value were expected")]
-    [InlineData("{\n\"a\" 1 }", 2, "a", "after \"a\" a colon")]
+    [InlineData("{\n\"a\" 1 }", 2, "", "a field name in double quotes and a colon")]
     [InlineData("{\n\"a\": 1\n\"b\": 2 }", 3, "", "a comma between two fields, or the } of the object opened on line 1")]
     [InlineData("{\n\"a\": [ 1\n2 ] }", 3, "a", "a comma between two values, or the ] of the list opened on line 2")]
     [InlineData("{\n\"a\": [ { \"b\": tru } ] }", 2, "a[0].b", "after \"b\"")]

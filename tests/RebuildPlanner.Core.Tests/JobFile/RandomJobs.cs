@@ -1,6 +1,5 @@
 using System.Globalization;
 using CsCheck;
-using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
@@ -10,9 +9,7 @@ namespace RebuildPlanner.Core.Tests.JobFile;
 /// <summary>Jobs that may stand in a file, drawn part by part; every word and every line of the closed list comes up.</summary>
 internal static class RandomJobs
 {
-    private static readonly Gen<string> Words = Gen.OneOfConst("oil", "früh", "a \"b\" c", "tab\there", "line\nbreak", "½ µ ± ³", "</script>", "𝄞", "\\", " ");
-
-    private static readonly Gen<string> Labels = Gen.OneOfConst("front", "L 1", "zweite Bank", "“x”", "4/5", "µ");
+    private static readonly Gen<string> Words = Gen.OneOf("oil", "früh", "a \"b\" c", "tab\there", "line\nbreak", "½ µ ± ³", "</script>", "𝄞", "\\", " ");
 
     private static readonly Gen<Stage> Stages = Gen.Enum<Stage>();
 
@@ -42,8 +39,8 @@ internal static class RandomJobs
         };
 
     private static readonly Gen<Gauge> Gauges =
-        from kind in Gen.OneOfConst("burette", "bore gauge", "plunger dial")
-        from resolution in Gen.OneOfConst("0.01", "0.002", "0.1")
+        from kind in Gen.OneOf("burette", "bore gauge", "plunger dial")
+        from resolution in Gen.OneOf("0.01", "0.002", "0.1")
         from study in Gen.Bool
         from readings in Gen.Int[2, 50]
         from glass in MaybeValue(Gen.Enum<Glass>())
@@ -86,26 +83,26 @@ internal static class RandomJobs
         from overhead in MaybeValue(Gen.Bool)
         from drive in MaybeValue(Gen.Enum<CamDrive>())
         from closes in Maybe(Gen.Int[1, 80].Select(degrees => Text($"{degrees} deg ABDC", EngineRules.InletCloses)))
-        from at in Maybe(Gen.OneOfConst("seat", "1 mm", "0.050 in"))
+        from at in Maybe(Gen.OneOf("seat", "1 mm", "0.050 in"))
         from angles in Maybe(Gen.Int[0, 30].Select(degrees => Text($"{degrees} deg", EngineRules.RunAngle)).Array[0, 2])
         select new Cam(overhead, drive, null, angles is null ? null : [.. angles], closes, null, at);
 
     private static Gen<Reading> Readings(Engine engine) =>
-        from line in Gen.OneOfConst([.. WhatTable.Lines.Where(line => line.What != What.PistonProtrusion)])
+        from line in Gen.OneOf([.. WhatTable.Lines.Where(line => line.What != What.PistonProtrusion)])
         from place in Places(line, engine)
         from value in Written(line.Rule)
         from fills in Gen.Int[0, 2]
         from torque in MaybeValue(Gen.Bool)
         from stage in MaybeValue(Stages)
         from struck in Maybe(Gen.Const("slipped, see note"))
-        from by in Maybe(Words)
+        from reader in Maybe(Words)
         let drop = line.What == What.CrownFill ? Text("5 mm ± 0.02 mm", EngineRules.Drop) : null
         select line.What is What.Chamber && fills > 0
-            ? new Reading(line.What, place, null, MakeFills(fills), fills == 1, drop, null, null, torque, stage, struck, By: by)
-            : new Reading(line.What, place, value, [], false, drop, null, null, torque, stage, struck, By: by);
+            ? new Reading(line.What, place, null, MakeFills(fills), fills == 1, drop, null, null, torque, stage, struck, By: reader)
+            : new Reading(line.What, place, value, [], false, drop, null, null, torque, stage, struck, By: reader);
 
     private static Gen<StatedFigure> Stated(Engine engine) =>
-        from line in Gen.OneOfConst([.. WhatTable.Lines.Where(line => line.What is not (What.PistonProtrusion or What.CrownFill))])
+        from line in Gen.OneOf([.. WhatTable.Lines.Where(line => line.What is not (What.PistonProtrusion or What.CrownFill))])
         from place in Places(line, engine)
         from value in Written(line.Rule)
         from source in Maybe(Words)
@@ -114,11 +111,11 @@ internal static class RandomJobs
         select new StatedFigure(line.What, place, value, source, stage, common);
 
     private static Gen<Place> Places(WhatLine line, Engine engine) =>
-        from cylinder in Gen.OneOfConst([.. engine.Labels])
-        from bank in Gen.OneOfConst([.. engine.Banks.Select(bank => bank.Label)])
-        from head in Gen.OneOfConst([.. engine.Heads.Select(head => head.Label)])
-        from depth in MaybeValue(Gen.OneOfConst(At.Top, At.Middle, At.Bottom))
-        from end in MaybeValue(Gen.OneOfConst(At.Front, At.Rear))
+        from cylinder in Gen.OneOf([.. engine.Labels])
+        from bank in Gen.OneOf([.. engine.Banks.Select(bank => bank.Label)])
+        from head in Gen.OneOf([.. engine.Heads.Select(head => head.Label)])
+        from depth in MaybeValue(Gen.OneOf(At.Top, At.Middle, At.Bottom))
+        from end in MaybeValue(Gen.OneOf(At.Front, At.Rear))
         from axis in MaybeValue(Gen.Enum<BoreAxis>())
         from valve in MaybeValue(Gen.Enum<Valve>())
         from hours in MaybeValue(Gen.Double[0.001, 12.0])
@@ -134,7 +131,7 @@ internal static class RandomJobs
             line.Keys.HasFlag(PlaceKeys.Clock) ? hours : null);
 
     private static Gen<Limit> Limits(Engine engine) =>
-        from subject in Gen.OneOfConst([.. Subjects.All])
+        from subject in Gen.OneOf([.. Subjects.All])
         from bound in Written(subject.Rule)
         from least in Gen.Bool
         from both in Gen.Bool
@@ -168,7 +165,7 @@ internal static class RandomJobs
 
     private static Engine MakeEngine(int cylinders, int split, bool vee)
     {
-        string[] labels = [.. Enumerable.Range(1, cylinders).Select(number => $"c{number}")];
+        string[] labels = [.. Enumerable.Range(1, cylinders).Select(number => $"“{number}” µ")];
         bool several = vee && cylinders > 1;
         int first = several ? 1 + (split % (cylinders - 1)) : cylinders;
         Bank[] banks = several ? [new("left", [.. labels[..first]]), new("right", [.. labels[first..]])] : [new("block", [.. labels])];

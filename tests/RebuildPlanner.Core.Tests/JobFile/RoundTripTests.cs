@@ -2,7 +2,6 @@ using System.Text;
 using CsCheck;
 using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
-using RebuildPlanner.Core.Measuring;
 
 namespace RebuildPlanner.Core.Tests.JobFile;
 
