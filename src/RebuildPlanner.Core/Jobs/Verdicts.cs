@@ -137,9 +137,14 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
 
     private double Probability(Limit limit, double[][] rows, LinearFigure[] judged)
     {
-        double[] lows = [.. judged.Select(figure => (limit.Min?.Midpoint ?? double.NegativeInfinity) - figure.Value)];
-        double[] highs = [.. judged.Select(figure => (limit.Max?.Midpoint ?? double.PositiveInfinity) - figure.Value)];
-        return JointProbability.Inside(model.Model.Sources, rows, lows, highs);
+        LimitedLine[] lines =
+        [
+            .. judged.Select((figure, index) => new LimitedLine(
+                rows[index],
+                (limit.Min?.Midpoint ?? double.NegativeInfinity) - figure.Value,
+                (limit.Max?.Midpoint ?? double.PositiveInfinity) - figure.Value)),
+        ];
+        return JointProbability.Of(model.Model.Sources, lines);
     }
 
     /// <summary>The first figure without limits that moves what is judged, or null.</summary>
