@@ -7,6 +7,9 @@ namespace RebuildPlanner.Core.Jobs;
 /// <summary>What to mind with these results, most serious first; one that holds for every cylinder is said once.</summary>
 public static class Cautions
 {
+    // A bound looser than this part of its width would change a printed digit.
+    private const double VisibleSlack = 1e-3;
+
     /// <summary>The cautions of a stage.</summary>
     public static IReadOnlyList<Caution> Of(StageModel model, StageFigures figures)
     {
@@ -50,7 +53,7 @@ public static class Cautions
 
             foreach (Output output in new[] { Output.CompressionRatio, Output.TrappedRatio, Output.CrankingPressure, Output.PistonToHead })
             {
-                if (figures.Of(output, cylinder) is { Worst.Exact: false })
+                if (figures.Of(output, cylinder) is { Worst: var worst } && worst.Slack > VisibleSlack * (worst.High - worst.Low))
                 {
                     yield return new Caution(
                         "worst-case-bounded", "The worst case of some figures is a certain bound, wider than what can be reached.", Label(model, cylinder));

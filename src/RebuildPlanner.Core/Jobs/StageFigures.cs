@@ -95,7 +95,7 @@ public sealed class StageFigures
 
         (int _, LinearFigure largest) = known.MaxBy(each => each.Figure.Value);
         (int _, LinearFigure smallest) = known.MinBy(each => each.Figure.Value);
-        WorstLimits worst = new(0.0, 0.0, Exact: true);
+        WorstLimits worst = new(0.0, 0.0, Slack: 0.0);
         foreach ((int up, LinearFigure _) in known)
         {
             foreach ((int down, LinearFigure _) in known)
@@ -103,7 +103,7 @@ public sealed class StageFigures
                 if (up != down)
                 {
                     WorstLimits pair = _worst.Difference(output, up, down);
-                    worst = new WorstLimits(Math.Max(worst.Low, pair.Low), Math.Max(worst.High, pair.High), worst.Exact && pair.Exact);
+                    worst = new WorstLimits(Math.Max(worst.Low, pair.Low), Math.Max(worst.High, pair.High), Math.Max(worst.Slack, pair.Slack));
                 }
             }
         }

@@ -7,13 +7,22 @@ namespace RebuildPlanner.Core.Stacks;
 /// <summary>The least and greatest a figure can be with every source anywhere between its worst limits.</summary>
 /// <param name="Low">The least.</param>
 /// <param name="High">The greatest.</param>
-/// <param name="Exact">True where both are attained at a corner proved to be the extreme; false where they are only certain bounds.</param>
-public readonly record struct WorstLimits(double Low, double High, bool Exact);
+/// <param name="Slack">
+/// How much wider than the truth the limits may be: 0 where both are attained at a corner proved to be the extreme; more where the direction
+/// of some source could not be proved and they are certain bounds.
+/// </param>
+public readonly record struct WorstLimits(double Low, double High, double Slack)
+{
+    /// <summary>True where both limits are attained.</summary>
+    public bool Exact => Slack == 0.0;
+}
 
 /// <summary>The worst case: exact corners where an output is monotone in every source, proved by interval derivatives; certain bounds elsewhere.</summary>
 /// <remarks>
 /// The derivative is taken by source, not by input, so that an error shared by several inputs, or by two cylinders in a spread,
-/// cancels as it does in the engine. Source: ieee1788.
+/// cancels as it does in the engine. A source whose direction is not proved is left at its middle and adds the most its slope can make of it
+/// (the mean value theorem): an interval evaluation in its place was up to a hundred times wider for the rod of an offset pin.
+/// Source: ieee1788.
 /// </remarks>
 public sealed class WorstCase
 {
@@ -38,10 +47,7 @@ public sealed class WorstCase
             BoundSlopes(cylinder);
             for (int output = 0; output < Outputs; output++)
             {
-                ReadOnlySpan<Interval> slopes = Slopes(cylinder, output);
-                (double low, bool lowExact) = Extreme(slopes, upper: false, cylinder, output);
-                (double high, bool highExact) = Extreme(slopes, upper: true, cylinder, output);
-                _limits[(cylinder * Outputs) + output] = new WorstLimits(low, high, lowExact && highExact);
+                _limits[(cylinder * Outputs) + output] = Limits(Slopes(cylinder, output), (Output)output, [(cylinder, 1.0)]);
             }
         }
     }
@@ -59,11 +65,7 @@ public sealed class WorstCase
             slopes[source] = up[source] - down[source];
         }
 
-        (double lowUp, bool a) = Extreme(slopes, upper: false, minuend, (int)output);
-        (double lowDown, bool b) = Extreme(slopes, upper: false, subtrahend, (int)output, opposite: true);
-        (double highUp, bool c) = Extreme(slopes, upper: true, minuend, (int)output);
-        (double highDown, bool d) = Extreme(slopes, upper: true, subtrahend, (int)output, opposite: true);
-        return new WorstLimits(lowUp - lowDown, highUp - highDown, a && b && c && d);
+        return Limits(slopes, output, [(minuend, 1.0), (subtrahend, -1.0)]);
     }
 
     /// <summary>The worst limits of the sum of one output over all cylinders, coherent unit.</summary>
@@ -79,18 +81,7 @@ public sealed class WorstCase
             }
         }
 
-        double low = 0.0, high = 0.0;
-        bool exact = true;
-        for (int cylinder = 0; cylinder < _model.Cylinders.Count; cylinder++)
-        {
-            (double ownLow, bool a) = Extreme(slopes, upper: false, cylinder, (int)output);
-            (double ownHigh, bool b) = Extreme(slopes, upper: true, cylinder, (int)output);
-            low += ownLow;
-            high += ownHigh;
-            exact &= a && b;
-        }
-
-        return new WorstLimits(low, high, exact);
+        return Limits(slopes, output, [.. Enumerable.Range(0, _model.Cylinders.Count).Select(cylinder => (cylinder, 1.0))]);
     }
 
     /// <summary>The worst limits of a figure that is exactly linear in its sources, coherent unit.</summary>
@@ -107,7 +98,7 @@ public sealed class WorstCase
             high += Math.Max(a, b);
         }
 
-        return new WorstLimits(low, high, Exact: true);
+        return new WorstLimits(low, high, Slack: 0.0);
     }
 
     /// <summary>Bounds the slope of every output of a cylinder to every source over the whole box of worst limits.</summary>
@@ -144,49 +135,54 @@ public sealed class WorstCase
         }
     }
 
-    /// <summary>The output with each source at the end that makes the guiding figure extreme; a source of unproved direction is left as an interval.</summary>
-    /// <param name="slopes">Slopes of the guiding figure: the output itself, a difference or a sum it takes part in.</param>
-    /// <param name="upper">Whether the guiding figure is made greatest, else least.</param>
-    /// <param name="opposite">Whether this output counts against the guiding figure, so that its bound is taken on the other side.</param>
-    private (double Value, bool Exact) Extreme(
-        ReadOnlySpan<Interval> slopes, bool upper, int cylinder, int output, bool opposite = false)
+    /// <summary>The limits of a signed sum of one output over some cylinders, with the slopes of that sum.</summary>
+    private WorstLimits Limits(ReadOnlySpan<Interval> slopes, Output output, ReadOnlySpan<(int Cylinder, double Sign)> members)
     {
-        CylinderForm form = _model.Cylinders[cylinder].Form;
-        CylinderFigures<Interval> bounds = default;
+        double low = 0.0, high = 0.0, loose = 0.0;
+        foreach ((int cylinder, double sign) in members)
+        {
+            low += sign * AtCorner(slopes, upper: false, cylinder, output);
+            high += sign * AtCorner(slopes, upper: true, cylinder, output);
+        }
+
+        for (int source = 0; source < _sources; source++)
+        {
+            if (!IsProved(slopes[source]))
+            {
+                Source doubt = _model.Sources[source];
+                Interval reach = slopes[source] * new Interval(doubt.WorstLow, doubt.WorstHigh);
+                loose += Math.Max(-reach.Low, reach.High);
+            }
+        }
+
+        return new WorstLimits(low - loose, high + loose, 2.0 * loose);
+    }
+
+    /// <summary>The output with each source of proved direction at the end that makes the guiding sum extreme, the others at their middle.</summary>
+    private double AtCorner(ReadOnlySpan<Interval> slopes, bool upper, int cylinder, Output output)
+    {
         CylinderFigures<Real> corner = default;
-        bool exact = true;
         for (int input = 0; input < Inputs; input++)
         {
-            double fixedPart = _model.EstimateOf(cylinder, (Input)input).Value;
-            Interval loosePart = default;
+            double value = _model.EstimateOf(cylinder, (Input)input).Value;
             foreach (Term term in _model.TermsOf(cylinder, input))
             {
-                Source source = _model.Sources[term.Source];
                 Interval slope = slopes[term.Source];
-                if (slope.IsNonNegative || slope.IsNonPositive)
+                if (IsProved(slope))
                 {
-                    fixedPart += term.Coefficient * (slope.IsNonNegative == upper ? source.WorstHigh : source.WorstLow);
-                }
-                else if (source.WorstLow != source.WorstHigh)
-                {
-                    exact = false;
-                    loosePart += term.Coefficient * new Interval(source.WorstLow, source.WorstHigh);
+                    Source source = _model.Sources[term.Source];
+                    value += term.Coefficient * (slope.IsNonNegative == upper ? source.WorstHigh : source.WorstLow);
                 }
             }
 
-            corner[input] = new Real(fixedPart);
-            bounds[input] = Interval.From(fixedPart) + loosePart;
+            corner[input] = new Real(value);
         }
 
-        if (exact)
-        {
-            CylinderStack<Real>.Compute(corner, form, out CylinderStack<Real> stack);
-            return (stack[output].Value, true);
-        }
-
-        CylinderStack<Interval>.Compute(bounds, form, out CylinderStack<Interval> bounded);
-        return (upper == opposite ? bounded[output].Low : bounded[output].High, false);
+        CylinderStack<Real>.Compute(corner, _model.Cylinders[cylinder].Form, out CylinderStack<Real> stack);
+        return stack.Of(output).Value;
     }
+
+    private static bool IsProved(Interval slope) => slope.IsNonNegative || slope.IsNonPositive;
 
     private Interval Box(int cylinder, int input)
     {

@@ -62,7 +62,7 @@ public class LawsOfTheStackTests
     }, iter: 40);
 
     [Fact]
-    public void Worst_case_holds_every_corner_tried_and_is_reached_by_one() => RandomEngine.Gen.Sample(engine =>
+    public void Worst_case_holds_every_corner_and_is_no_wider_than_its_slack() => RandomEngine.Gen.Sample(engine =>
     {
         EngineModel model = new StageModel(engine.Job(), Stage.AsReceived).Model;
         WorstCase worst = new(model);
@@ -93,8 +93,15 @@ public class LawsOfTheStackTests
             high = Math.Max(high, stack.Of(Output.CompressionRatio).Value);
         }
 
-        return limits.Exact && Close(low, limits.Low) && Close(high, limits.High);
+        // An offset pin leaves the rod's direction unproved by a hair: the limits may be wider by their slack, never narrower.
+        double width = limits.High - limits.Low;
+        return limits.Low <= low + (1e-9 * width) && limits.High >= high - (1e-9 * width)
+            && limits.Slack < 0.02 * width && low - limits.Low <= limits.Slack + (1e-9 * width) && limits.High - high <= limits.Slack + (1e-9 * width);
     }, iter: 6);
+
+    [Fact]
+    public void Without_pin_offset_the_worst_case_is_an_exact_corner() =>
+        Assert.True(new WorstCase(new StageModel(Workbench.Engine(2), Stage.AsReceived).Model).Limits(1, Output.CompressionRatio).Exact);
 
     [Fact]
     public void Worst_case_contains_the_95_percent_interval() => RandomEngine.Gen.Sample(engine =>
