@@ -27,9 +27,9 @@ public static class CompletionsCommand
         complete -c rebuild -a '(set -l line (commandline -cp); rebuild "[suggest:"(string length -- $line)"]" "$line" 2>/dev/null)'
         """;
 
-    private const string Description = """
-        Prints a script that lets the shell finish this program's words.
+    private const string Description = "Prints a script that lets the shell finish this program's words.";
 
+    private const string Example = """
         Example:
           rebuild completions bash >> ~/.bashrc
         """;
@@ -39,7 +39,7 @@ public static class CompletionsCommand
     {
         Argument<string> shell = new("shell") { Description = "bash, zsh or fish." };
         shell.AcceptOnlyFromAmong("bash", "zsh", "fish");
-        Command command = new("completions", Description) { shell };
+        ExampleCommand command = new("completions", Description, Example) { shell };
         command.SetAction(parsed =>
         {
             terminal.Output.WriteLine(parsed.GetValue(shell) switch { "bash" => Bash, "zsh" => Zsh, _ => Fish });

@@ -8,13 +8,16 @@ namespace RebuildPlanner.Cli;
 /// <summary><c>results</c>: a job file in, volumes, ratios, gaps and verdicts out.</summary>
 public static class ResultsCommand
 {
-    private const string Description = """
-        Volumes, compression ratio and gaps of each cylinder at a stage, how sure they are, and which limits hold.
+    private const string Description = "Volumes, ratio and gaps of each cylinder, how sure they are, which limits hold.";
 
+    private const string Example = """
         Example:
           rebuild results --file samples/van-four.json --stage "as machined"
 
-        Exit codes: 0 done; 1 done, and some verdict is outside; 2 the request or the file is wrong.
+        Exit codes:
+          0  done
+          1  done, and some verdict is outside
+          2  the request or the file is wrong; what would be right is said
         """;
 
     /// <summary>Makes the command.</summary>
@@ -23,14 +26,14 @@ public static class ResultsCommand
         Option<string> file = new("--file") { Description = "The job file.", HelpName = "job.json", Required = true };
         Option<Stage?> stage = new("--stage")
         {
-            Description = "before, \"as received\", planned or \"as machined\". Left out: the last stage the job holds anything of.",
+            Description = "before, \"as received\", planned or \"as machined\"; else the last stage with entries.",
             HelpName = "stage",
             CustomParser = ParseStage,
         };
         stage.CompletionSources.Add(_ => StageWords.All.Select(word => new System.CommandLine.Completions.CompletionItem(word)));
-        Option<bool> json = new("--json") { Description = "The results as JSON, units always cm3, mm, kPa and 1." };
+        Option<bool> json = new("--json") { Description = "As JSON: units cm3, mm, kPa and 1, full precision." };
         Option<bool> inch = new("--inch") { Description = "Print in inch, cubic inch and psi." };
-        Command command = new("results", Description) { file, stage, json, inch };
+        ExampleCommand command = new("results", Description, Example) { file, stage, json, inch };
         command.SetAction(parsed => Run(
             terminal, parsed.GetValue(file)!, parsed.GetValue(stage), parsed.GetValue(json),
             parsed.GetValue(inch) ? UnitSystem.Inch : UnitSystem.Metric));

@@ -31,10 +31,14 @@ public static class Shell
         });
     }
 
-    private static RootCommand Commands(Terminal terminal) =>
-        new("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.")
+    private static RootCommand Commands(Terminal terminal)
+    {
+        RootCommand root = new("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.")
         {
             ResultsCommand.Make(terminal),
             CompletionsCommand.Make(terminal),
         };
+        ExampleHelp.AddTo(root);
+        return root;
+    }
 }

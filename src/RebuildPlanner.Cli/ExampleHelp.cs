@@ -1,0 +1,43 @@
+using System.CommandLine;
+using System.CommandLine.Help;
+using System.CommandLine.Invocation;
+
+namespace RebuildPlanner.Cli;
+
+/// <summary>A command whose help ends with an example.</summary>
+/// <param name="name">Its word.</param>
+/// <param name="description">What it does, in one sentence.</param>
+/// <param name="example">What the help ends with.</param>
+internal sealed class ExampleCommand(string name, string description, string example) : Command(name, description)
+{
+    /// <summary>What the help ends with.</summary>
+    public string Example { get; } = example;
+}
+
+/// <summary>The library's help with the command's example after it.</summary>
+internal sealed class ExampleHelp(HelpAction help) : SynchronousCommandLineAction
+{
+    /// <summary>Who asks for help is not told what is missing.</summary>
+    public override bool ClearsParseErrors => true;
+
+    /// <inheritdoc/>
+    public override int Invoke(ParseResult parseResult)
+    {
+        int code = help.Invoke(parseResult);
+        if (parseResult.CommandResult.Command is ExampleCommand command)
+        {
+            parseResult.InvocationConfiguration.Output.WriteLine(command.Example);
+        }
+
+        return code;
+    }
+
+    /// <summary>Lets every command of a root end its help so.</summary>
+    public static void AddTo(RootCommand root)
+    {
+        foreach (HelpOption option in root.Options.OfType<HelpOption>())
+        {
+            option.Action = new ExampleHelp((HelpAction)option.Action!);
+        }
+    }
+}

@@ -1,0 +1,28 @@
+namespace RebuildPlanner.Cli.Tests;
+
+/// <summary>Runs a command in process and keeps what it wrote.</summary>
+internal sealed record Screen(int ExitCode, string Output, string Error)
+{
+    public static Screen Of(params string[] args)
+    {
+        using StringWriter output = new() { NewLine = "\n" }, error = new() { NewLine = "\n" };
+        int code = Shell.Run(args, new Terminal(output, error, Terminal.UsualWidthColumns, IsScreen: false));
+        return new Screen(code, output.ToString().ReplaceLineEndings("\n"), error.ToString().ReplaceLineEndings("\n"));
+    }
+
+    /// <summary>Writes a job file, runs a command on it and removes it.</summary>
+    public static Screen OfFile(string json, params string[] options)
+    {
+        string path = Path.Combine(Path.GetTempPath(), $"job-{Guid.NewGuid():N}.json");
+        File.WriteAllText(path, json);
+        try
+        {
+            Screen screen = Of(["results", "--file", path, .. options]);
+            return screen with { Error = screen.Error.Replace(path, "job.json", StringComparison.Ordinal) };
+        }
+        finally
+        {
+            File.Delete(path);
+        }
+    }
+}
