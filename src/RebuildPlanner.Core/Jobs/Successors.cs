@@ -16,28 +16,28 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
     /// <param name="stage">The stage at which something may have been done.</param>
     public bool Ends(Figure earlier, int cylinder, Stage stage)
     {
-        bool bored = _boreCuts.Any(kind => Made(kind));
-        bool skimmed = Made(CutKind.HeadSkim);
-        bool seats = Made(CutKind.ValveSeat);
-        bool decked = Made(CutKind.DeckCut) || Rise(cylinder, stage) is not null;
-        bool piston = PistonChanged(cylinder, stage, counts: earlier.Stage is not null);
         return earlier.What switch
         {
-            What.Bore or What.Wall => bored,
-            What.Chamber => skimmed || seats,
-            What.Deck => decked || piston || Changed(cylinder, stage).Any(),
-            What.Crown or What.Skirt or What.CompressionHeight or What.TopLandHeight or What.TopLandDiameter or What.Rock => piston,
-            What.RingGap => piston || bored,
-            What.WholeChamber => bored || skimmed || seats || decked || piston || GasketChanged(cylinder, stage, counts: earlier.Stage is not null)
-                || Changed(cylinder, stage).Any(),
-            What.PistonToValve => skimmed || seats || decked || piston || GasketChanged(cylinder, stage, counts: earlier.Stage is not null),
-            What.HeadHeight => skimmed,
-            What.BlockHeight or What.DeckHeight or What.BarrelHeight or What.LinerProtrusion => decked,
-            What.Flatness => skimmed || decked,
+            What.Bore or What.Wall => Bored(),
+            What.Chamber => HeadWorked(),
+            What.Deck => Decked() || Piston() || Changed(cylinder, stage).Any(),
+            What.Crown or What.Skirt or What.CompressionHeight or What.TopLandHeight or What.TopLandDiameter or What.Rock => Piston(),
+            What.RingGap => Piston() || Bored(),
+            What.WholeChamber => Bored() || HeadWorked() || Decked() || Piston() || Gasket() || Changed(cylinder, stage).Any(),
+            What.PistonToValve => HeadWorked() || Decked() || Piston() || Gasket(),
+            What.HeadHeight => Made(CutKind.HeadSkim),
+            What.BlockHeight or What.DeckHeight or What.BarrelHeight or What.LinerProtrusion => Decked(),
+            What.Flatness => Made(CutKind.HeadSkim) || Decked(),
             _ => false,
         };
 
+        // Asked only where the figure depends on the answer: a crank rise is itself a figure, and must not ask for itself.
         bool Made(CutKind kind) => parts.Cuts(kind, cylinder, stage).Any();
+        bool Bored() => _boreCuts.Any(Made);
+        bool HeadWorked() => Made(CutKind.HeadSkim) || Made(CutKind.ValveSeat);
+        bool Decked() => Made(CutKind.DeckCut) || Rise(cylinder, stage) is not null;
+        bool Piston() => PistonChanged(cylinder, stage, firstCounts: earlier.Stage is not null);
+        bool Gasket() => GasketChanged(cylinder, stage, firstCounts: earlier.Stage is not null);
     }
 
     /// <summary>The figure carried through what was done at a stage, or null where a figure for it is missing.</summary>
@@ -166,7 +166,7 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
     {
         List<(double, Estimate)> change = [];
         List<Figure> restsOn = [earlier];
-        if (PistonChanged(cylinder, stage, counts: earlier.Stage is not null))
+        if (PistonChanged(cylinder, stage, firstCounts: earlier.Stage is not null))
         {
             Figure? old = before is { } previous ? find(What.CompressionHeight, cylinder, previous) : null;
             if (old is null || find(What.CompressionHeight, cylinder, stage) is not { } fresh)
@@ -262,11 +262,11 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
         }
     }
 
-    private bool PistonChanged(int cylinder, Stage stage, bool counts) =>
-        ChangedPart(parts.Piston(cylinder, stage), Before(stage) is { } before ? parts.Piston(cylinder, before) : null, stage, counts);
+    private bool PistonChanged(int cylinder, Stage stage, bool firstCounts) =>
+        ChangedPart(parts.Piston(cylinder, stage), Before(stage) is { } before ? parts.Piston(cylinder, before) : null, stage, firstCounts);
 
-    private bool GasketChanged(int cylinder, Stage stage, bool counts) =>
-        ChangedPart(parts.Gasket(cylinder, stage), Before(stage) is { } before ? parts.Gasket(cylinder, before) : null, stage, counts);
+    private bool GasketChanged(int cylinder, Stage stage, bool firstCounts) =>
+        ChangedPart(parts.Gasket(cylinder, stage), Before(stage) is { } before ? parts.Gasket(cylinder, before) : null, stage, firstCounts);
 
     /// <summary>A part put in where none was recorded is a change for what was read before it, but not for a figure that holds throughout.</summary>
     private static bool ChangedPart<TPart>(FittedPart<TPart>? now, FittedPart<TPart>? then, Stage stage, bool firstCounts) =>

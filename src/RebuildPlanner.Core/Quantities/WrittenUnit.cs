@@ -9,7 +9,7 @@ internal sealed class WrittenUnit
 {
     private readonly Func<double, double>? _convert;
     private readonly Func<double, double>? _convertDifference;
-    private decimal? _factor;
+    private readonly Lazy<decimal> _factor;
 
     private WrittenUnit(string word, QuantityKind kind, Func<double, double>? convert, Func<double, double>? convertDifference)
     {
@@ -17,14 +17,16 @@ internal sealed class WrittenUnit
         Kind = kind;
         _convert = convert;
         _convertDifference = convertDifference;
+        _factor = new Lazy<decimal>(() => convertDifference is null ? 1m : (decimal)convertDifference(1.0));
     }
 
     public string Word { get; }
 
     public QuantityKind Kind { get; }
 
-    // Fetched when first needed: the library's first conversion costs milliseconds that a metric job never has to pay.
-    public decimal Factor => _factor ??= _convertDifference is null ? 1m : (decimal)_convertDifference(1.0);
+    // Fetched when first needed: the library's first conversion costs milliseconds that a metric job never has to pay. A Lazy, since a
+    // decimal is written in parts and a second thread once read half of one.
+    public decimal Factor => _factor.Value;
 
     private bool HasOffset => _convert is not null;
 
