@@ -78,23 +78,18 @@ internal static class ResultsScreen
     {
         string unit = QuantityPrint.Unit(QuantityKind.Volume, system);
         Table table = NewTable("cyl", "chamber", "gasket", "deck", "crown", "top land", "clearance", "swept");
-        bool crossChecked = results.Cylinders.Any(cylinder => cylinder.CrossCheck is not null);
-        if (crossChecked)
-        {
-            table.AddColumn(new TableColumn("whole less parts").RightAligned());
-        }
-
         foreach (CylinderResult cylinder in results.Cylinders)
         {
-            string[] cells =
-            [
-                cylinder.Cylinder, Value(cylinder.Chamber, system), Value(cylinder.Gasket, system), Value(cylinder.Deck, system),
-                Value(cylinder.Crown, system), Value(cylinder.TopLand, system), Value(cylinder.ClearanceVolume, system), Value(cylinder.SweptVolume, system),
-            ];
-            Row(table, crossChecked ? [.. cells, WithDoubt(cylinder.CrossCheck, system)] : cells);
+            Row(
+                table, cylinder.Cylinder, Value(cylinder.Chamber, system), Value(cylinder.Gasket, system), Value(cylinder.Deck, system),
+                Value(cylinder.Crown, system), Value(cylinder.TopLand, system), Value(cylinder.ClearanceVolume, system), Value(cylinder.SweptVolume, system));
         }
 
         Write(console, $"Volumes, {unit}", table);
+        foreach (CylinderResult cylinder in results.Cylinders.Where(cylinder => cylinder.CrossCheck is not null))
+        {
+            Line(console, Escape($"Cylinder {cylinder.Cylinder}: whole chamber less the sum of its parts {WithDoubt(cylinder.CrossCheck!, system)} {unit}."));
+        }
     }
 
     private static void Spreads(IAnsiConsole console, Results results, UnitSystem system)
@@ -105,6 +100,10 @@ internal static class ResultsScreen
         Add("spread of chambers", results.ChamberSpread);
         table.Columns[0].LeftAligned();
         Write(console, "Engine", table);
+        if (results.RatioSpread is { Low: <= 0.0 })
+        {
+            Line(console, "Between the ratios of the cylinders no difference is proven.");
+        }
 
         void Add(string name, ResultQuantity? quantity)
         {
@@ -125,18 +124,21 @@ internal static class ResultsScreen
             return;
         }
 
-        Table table = NewTable("limit", "cyl", "verdict", "belief", "wanted", "would settle it");
-        table.Columns[0].LeftAligned();
-        table.Columns[2].LeftAligned();
-        table.Columns[5].LeftAligned();
-        foreach (Verdict verdict in results.Verdicts)
+        foreach (IGrouping<(string, string, double), Verdict> limit in results.Verdicts.GroupBy(verdict => (verdict.What, verdict.Limit, verdict.Level)))
         {
-            Row(
-                table, $"{verdict.What} {verdict.Limit}", verdict.Cylinder ?? "all", ResultsJson.WordOf(verdict.State),
-                verdict.Probability is { } probability ? Belief(probability) : Dash, Belief(verdict.Level), verdict.Settle ?? "");
-        }
+            (string what, string bounds, double level) = limit.Key;
+            Table table = NewTable("cyl", "verdict", "belief", "would settle it");
+            table.Columns[1].LeftAligned();
+            table.Columns[3].LeftAligned();
+            foreach (Verdict verdict in limit)
+            {
+                Row(
+                    table, verdict.Cylinder ?? "all", ResultsJson.WordOf(verdict.State),
+                    verdict.Probability is { } probability ? Belief(probability) : Dash, verdict.Settle ?? "");
+            }
 
-        Write(console, "Limits", table);
+            Write(console, $"Limit: {what} {bounds} (belief wanted {Belief(level)})", table);
+        }
     }
 
     private static void Missing(IAnsiConsole console, Results results)
@@ -192,8 +194,8 @@ internal static class ResultsScreen
     private static string Value(ResultQuantity? quantity, UnitSystem system) =>
         quantity is null ? Dash : QuantityPrint.Number(quantity.Value, quantity.Kind, quantity.StandardUncertainty, system);
 
-    private static string WithDoubt(ResultQuantity? quantity, UnitSystem system) =>
-        quantity is { StandardUncertainty: { } u } ? $"{Value(quantity, system)} ± {QuantityPrint.Uncertainty(u, quantity.Kind, system)}" : Value(quantity, system);
+    private static string WithDoubt(ResultQuantity quantity, UnitSystem system) =>
+        $"{Value(quantity, system)} (95 % from {End(quantity, q => q.Low, system)} to {End(quantity, q => q.High, system)})";
 
     private static string End(ResultQuantity? quantity, Func<ResultQuantity, double?> end, UnitSystem system) =>
         quantity is not null && end(quantity) is { } value ? QuantityPrint.Number(value, quantity.Kind, quantity.StandardUncertainty, system) : Dash;

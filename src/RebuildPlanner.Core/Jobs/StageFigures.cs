@@ -80,7 +80,7 @@ public sealed class StageFigures
         return new LinearFigure(estimate.Value, row, WorstCase.OfLinear(_model.Model.Sources, estimate.Value, row), estimate.Terms);
     }
 
-    /// <summary>Largest less smallest of an output, or null for fewer than two cylinders that have it.</summary>
+    /// <summary>Largest less smallest of an output, or null for one cylinder and where a cylinder lacks it: the missing one might be the extreme.</summary>
     /// <remarks>First order by the extreme pair; the worst case over every pair.</remarks>
     public LinearFigure? Spread(Output output)
     {
@@ -88,7 +88,7 @@ public sealed class StageFigures
         [
             .. Cylinders.Select(cylinder => (cylinder, Of(output, cylinder))).Where(each => each.Item2 is not null)!,
         ];
-        if (known.Length < 2)
+        if (known.Length < 2 || known.Length < _model.Model.Cylinders.Count)
         {
             return null;
         }
