@@ -51,7 +51,7 @@ internal static class ResultsScreen
                 End(cylinder.CompressionRatio, q => q.WorstHigh, system), Value(cylinder.TrappedRatio, system), Value(cylinder.CrankingPressure, system));
         }
 
-        Write(console, "Compression ratio", table);
+        Write(console, "Compression ratio", table, results.Cylinders.Any(cylinder => cylinder.CompressionRatio is not null));
     }
 
     private static void Bores(IAnsiConsole console, Results results, UnitSystem system)
@@ -70,8 +70,8 @@ internal static class ResultsScreen
                 End(cylinder.Bore, q => q.High, system), Value(cylinder.Taper, system), Value(cylinder.OutOfRound, system));
         }
 
-        Write(console, $"Piston to head, {unit}", gaps);
-        Write(console, $"Bores, {unit}", bores);
+        Write(console, $"Piston to head, {unit}", gaps, results.Cylinders.Any(cylinder => cylinder.PistonToHead is not null));
+        Write(console, $"Bores, {unit}", bores, results.Cylinders.Any(cylinder => cylinder.Bore is not null));
     }
 
     private static void VolumesOf(IAnsiConsole console, Results results, UnitSystem system)
@@ -85,7 +85,7 @@ internal static class ResultsScreen
                 Value(cylinder.Crown, system), Value(cylinder.TopLand, system), Value(cylinder.ClearanceVolume, system), Value(cylinder.SweptVolume, system));
         }
 
-        Write(console, $"Volumes, {unit}", table);
+        Write(console, $"Volumes, {unit}", table, results.Cylinders.Any(cylinder => (cylinder.Chamber ?? cylinder.SweptVolume ?? cylinder.Crown) is not null));
         foreach (CylinderResult cylinder in results.Cylinders.Where(cylinder => cylinder.CrossCheck is not null))
         {
             Line(console, Escape($"Cylinder {cylinder.Cylinder}: whole chamber less the sum of its parts {WithDoubt(cylinder.CrossCheck!, system)} {unit}."));
@@ -99,7 +99,7 @@ internal static class ResultsScreen
         Add("spread of ratio", results.RatioSpread);
         Add("spread of chambers", results.ChamberSpread);
         table.Columns[0].LeftAligned();
-        Write(console, "Engine", table);
+        Write(console, "Engine", table, table.Rows.Count > 0);
         if (results.RatioSpread is { Low: <= 0.0 })
         {
             Line(console, "Between the ratios of the cylinders no difference is proven.");
@@ -137,7 +137,7 @@ internal static class ResultsScreen
                     verdict.Probability is { } probability ? Belief(probability) : Dash, verdict.Settle ?? "");
             }
 
-            Write(console, $"Limit: {what} {bounds} (belief wanted {Belief(level)})", table);
+            Write(console, $"Limit: {what} {bounds} (belief wanted {Belief(level)})", table, known: true);
         }
     }
 
@@ -221,11 +221,14 @@ internal static class ResultsScreen
 
     private static void Row(Table table, params string[] cells) => table.AddRow([.. cells.Select(cell => new Text(cell))]);
 
-    private static void Write(IAnsiConsole console, string title, Table table)
+    /// <summary>Writes a table under its title, unless nothing in it is known.</summary>
+    private static void Write(IAnsiConsole console, string title, Table table, bool known)
     {
-        console.WriteLine();
-        Line(console, $"[bold]{Escape(title)}[/]");
-        console.Write(table);
+        if (known)
+        {
+            Section(console, title);
+            console.Write(table);
+        }
     }
 
     private static void Section(IAnsiConsole console, string title)

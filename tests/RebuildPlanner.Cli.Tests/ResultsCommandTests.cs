@@ -20,7 +20,7 @@ public class ResultsCommandTests
     [MemberData(nameof(Samples))]
     public void Every_sample_fits_80_columns_without_a_control_character(string sample)
     {
-        foreach (string[] options in new string[][] { [], ["--inch"], ["--stage", "as received"] })
+        foreach (string[] options in new string[][] { [], ["--inch"] })
         {
             Screen screen = Screen.Of(["results", "--file", RepositoryFiles.At("samples", sample), .. options]);
 
@@ -30,6 +30,16 @@ public class ResultsCommandTests
             Assert.DoesNotContain(screen.Output, character => char.IsControl(character) && character != '\n');
             Assert.DoesNotContain('…', screen.Output); // a cell cut short is a figure lost
         }
+    }
+
+    [Fact]
+    public void A_table_of_which_nothing_is_known_is_left_out()
+    {
+        string output = Screen.Of("results", "--file", RepositoryFiles.At("samples", "fen-boat-three.json"), "--stage", "as received").Output;
+
+        Assert.Contains("Volumes, cm³", output, StringComparison.Ordinal);
+        Assert.DoesNotContain("Compression ratio", output, StringComparison.Ordinal);
+        Assert.Contains(" - deck: all", output, StringComparison.Ordinal);
     }
 
     [Fact]
