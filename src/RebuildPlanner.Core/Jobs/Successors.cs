@@ -20,10 +20,10 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
         {
             What.Bore or What.Wall => Bored(),
             What.Chamber => HeadWorked(),
-            What.Deck => Decked() || Piston() || Changed(cylinder, stage).Any(),
+            What.Deck => Decked() || Piston() || Reached(),
             What.Crown or What.Skirt or What.CompressionHeight or What.TopLandHeight or What.TopLandDiameter or What.Rock => Piston(),
             What.RingGap => Piston() || Bored(),
-            What.WholeChamber => Bored() || HeadWorked() || Decked() || Piston() || Gasket() || Changed(cylinder, stage).Any(),
+            What.WholeChamber => Bored() || HeadWorked() || Decked() || Piston() || Gasket() || Reached(),
             What.PistonToValve => HeadWorked() || Decked() || Piston() || Gasket(),
             What.HeadHeight => Made(CutKind.HeadSkim),
             What.BlockHeight or What.DeckHeight or What.BarrelHeight or What.LinerProtrusion => Decked(),
@@ -36,8 +36,12 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
         bool Bored() => _boreCuts.Any(Made);
         bool HeadWorked() => Made(CutKind.HeadSkim) || Made(CutKind.ValveSeat);
         bool Decked() => Made(CutKind.DeckCut) || Rise(cylinder, stage) is not null;
-        bool Piston() => PistonChanged(cylinder, stage, firstCounts: earlier.Stage is not null);
-        bool Gasket() => GasketChanged(cylinder, stage, firstCounts: earlier.Stage is not null);
+
+        // A figure that holds throughout was stated of whatever parts are in: metal removed ends it, another part does not.
+        bool Staged() => earlier.Stage is not null;
+        bool Piston() => Staged() && PistonChanged(cylinder, stage);
+        bool Gasket() => Staged() && parts.Gasket(cylinder, stage)?.Since == stage;
+        bool Reached() => Staged() && Changed(cylinder, stage).Any();
     }
 
     /// <summary>The figure carried through what was done at a stage, or null where a figure for it is missing.</summary>
@@ -166,7 +170,7 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
     {
         List<(double, Estimate)> change = [];
         List<Figure> restsOn = [earlier];
-        if (PistonChanged(cylinder, stage, firstCounts: earlier.Stage is not null))
+        if (earlier.Stage is not null && PistonChanged(cylinder, stage))
         {
             Figure? old = before is { } previous ? find(What.CompressionHeight, cylinder, previous) : null;
             if (old is null || find(What.CompressionHeight, cylinder, stage) is not { } fresh)
@@ -188,7 +192,7 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
             Add(-1.0, rise);
         }
 
-        What[] changed = [.. Changed(cylinder, stage)];
+        What[] changed = earlier.Stage is null ? [] : [.. Changed(cylinder, stage)];
         if (changed.Contains(What.BaseGasket) && before is { } earlierStage)
         {
             Add(1.0, find(What.BaseGasket, cylinder, stage)!);
@@ -262,21 +266,8 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
         }
     }
 
-    private bool PistonChanged(int cylinder, Stage stage, bool firstCounts) =>
-        ChangedPart(parts.Piston(cylinder, stage), Before(stage) is { } before ? parts.Piston(cylinder, before) : null, stage, firstCounts);
-
-    private bool GasketChanged(int cylinder, Stage stage, bool firstCounts) =>
-        ChangedPart(parts.Gasket(cylinder, stage), Before(stage) is { } before ? parts.Gasket(cylinder, before) : null, stage, firstCounts);
-
-    /// <summary>A part put in where none was recorded is a change for what was read before it, but not for a figure that holds throughout.</summary>
-    private static bool ChangedPart<TPart>(FittedPart<TPart>? now, FittedPart<TPart>? then, Stage stage, bool firstCounts) =>
-        now is not null && now.Since == stage && (then is not null || firstCounts);
-
-    private Stage? Before(Stage stage)
-    {
-        int index = parts.Stages.ToList().IndexOf(stage);
-        return index > 0 ? parts.Stages[index - 1] : null;
-    }
+    // A piston put in where none was recorded is another one too: what was read before it was read on something else.
+    private bool PistonChanged(int cylinder, Stage stage) => parts.Piston(cylinder, stage)?.Since == stage;
 
     /// <summary>How far the crank rises at a stage: by line boring, or as read.</summary>
     private Figure? Rise(int cylinder, Stage stage) =>

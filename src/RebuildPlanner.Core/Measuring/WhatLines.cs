@@ -31,7 +31,7 @@ internal static class WhatLines
         Of(What.Deck, "deck", Mm(-15, 50, SignWords.Deck), Cylinder, Metal.Block, PinEnd, Named.Cylinder),
         Of(What.Rock, "rock", Mm(0, 2), Cylinder, Metal.Block, None, Named.Cylinder),
         Of(What.Crown, "crown", Cc(-2000, 5000, SignWords.Crown), Cylinder, Metal.Piston, None, Named.CylinderOrPiece),
-        Of(What.CrownFill, "crown fill", Cc(0, 10_000), Cylinder, Metal.Piston, Drop, Named.Cylinder),
+        Of(What.CrownFill, "crown fill", Cc(0, 10_000), Cylinder, Metal.Block, Drop, Named.Cylinder), // most of the fill stands in the bore
         Of(What.WholeChamber, "whole chamber", Cc(0.5, 15_000), Cylinder, Metal.Head, None, Named.Cylinder),
         Of(What.PlugHole, "plug hole", Cc(0, 100), Cylinder, Metal.Head),
         Of(What.Pocket, "pocket", Cc(0, 1000), Cylinder, Metal.Head, PlaceKeys.Valve),

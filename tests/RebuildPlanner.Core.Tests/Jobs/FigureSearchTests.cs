@@ -119,6 +119,20 @@ public class FigureSearchTests
     }
 
     [Fact]
+    public void A_figure_that_holds_throughout_outlives_a_change_of_parts_but_not_a_cut()
+    {
+        Job job = Workbench.Single(
+            """ "assumed": [ { "what": "top land height", "value": "5 mm ± 0.5 mm" }, { "what": "deck", "value": "0.30 mm ± 0.02 mm below" } ] """,
+            """ "given": [ { "what": "bore", "value": "81 mm ± 0.01 mm" } ] """,
+            """ "parts": { "pistons": [ { "id": "old", "compressionHeight": "30.0 mm" }, { "id": "new", "compressionHeight": "30.4 mm" } ] } """,
+            """ "fitted": [ { "stage": "as received", "piston": "old" }, { "stage": "as machined", "piston": "new" } ] """,
+            """ "cuts": [ { "what": "deck cut", "value": "0.1 mm ± 0.01 mm", "stage": "as machined" } ] """);
+
+        Assert.Equal(5.0, Workbench.Find(job, Stage.AsMachined, What.TopLandHeight)!.Estimate.Value);
+        Assert.Equal((FigureKind.Computed, 0.2), Kind(job, Stage.AsMachined, What.Deck));
+    }
+
+    [Fact]
     public void A_part_refitted_under_the_same_id_keeps_what_was_measured_on_it()
     {
         Job job = Workbench.Single(
