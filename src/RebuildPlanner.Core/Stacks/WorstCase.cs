@@ -39,9 +39,8 @@ public sealed class WorstCase
             for (int output = 0; output < Outputs; output++)
             {
                 ReadOnlySpan<Interval> slopes = Slopes(cylinder, output);
-                (double low, bool lowExact) = Extreme(slopes, upper: false, cylinder, output);
-                (double high, bool highExact) = Extreme(slopes, upper: true, cylinder, output);
-                _limits[(cylinder * Outputs) + output] = new WorstLimits(low, high, lowExact && highExact);
+                _limits[(cylinder * Outputs) + output] = Between(
+                    slopes, Extreme(slopes, upper: false, cylinder, output), Extreme(slopes, upper: true, cylinder, output));
             }
         }
     }
@@ -59,11 +58,10 @@ public sealed class WorstCase
             slopes[source] = up[source] - down[source];
         }
 
-        (double lowUp, bool a) = Extreme(slopes, upper: false, minuend, (int)output);
-        (double lowDown, bool b) = Extreme(slopes, upper: false, subtrahend, (int)output, opposite: true);
-        (double highUp, bool c) = Extreme(slopes, upper: true, minuend, (int)output);
-        (double highDown, bool d) = Extreme(slopes, upper: true, subtrahend, (int)output, opposite: true);
-        return new WorstLimits(lowUp - lowDown, highUp - highDown, a && b && c && d);
+        return Between(
+            slopes,
+            Extreme(slopes, upper: false, minuend, (int)output) - Extreme(slopes, upper: false, subtrahend, (int)output, opposite: true),
+            Extreme(slopes, upper: true, minuend, (int)output) - Extreme(slopes, upper: true, subtrahend, (int)output, opposite: true));
     }
 
     /// <summary>The worst limits of the sum of one output over all cylinders, coherent unit.</summary>
@@ -79,18 +77,14 @@ public sealed class WorstCase
             }
         }
 
-        double low = 0.0, high = 0.0;
-        bool exact = true;
+        End low = default, high = default;
         for (int cylinder = 0; cylinder < _model.Cylinders.Count; cylinder++)
         {
-            (double ownLow, bool a) = Extreme(slopes, upper: false, cylinder, (int)output);
-            (double ownHigh, bool b) = Extreme(slopes, upper: true, cylinder, (int)output);
-            low += ownLow;
-            high += ownHigh;
-            exact &= a && b;
+            low += Extreme(slopes, upper: false, cylinder, (int)output);
+            high += Extreme(slopes, upper: true, cylinder, (int)output);
         }
 
-        return new WorstLimits(low, high, exact);
+        return Between(slopes, low, high);
     }
 
     /// <summary>The worst limits of a figure that is exactly linear in its sources, coherent unit.</summary>
@@ -144,11 +138,55 @@ public sealed class WorstCase
         }
     }
 
+    /// <summary>One end of a figure, found two ways from the sources of proved direction.</summary>
+    /// <param name="Bound">With the sources of unproved direction left as intervals: certain.</param>
+    /// <param name="Corner">With those at their centres.</param>
+    /// <param name="Size">How large the numbers were that it was made of, for what rounding may do.</param>
+    private readonly record struct End(double Bound, double Corner, double Size)
+    {
+        public static End operator +(End left, End right) => new(left.Bound + right.Bound, left.Corner + right.Corner, left.Size + right.Size);
+
+        public static End operator -(End left, End right) => new(left.Bound - right.Bound, left.Corner - right.Corner, left.Size + right.Size);
+    }
+
+    /// <summary>The limits from both ends: the nearer of the bound and of the corner moved by what the unproved slopes can make of it.</summary>
+    /// <remarks>
+    /// An error shared by two cylinders has in their difference a slope of zero, which outward rounding turns into a sliver on both sides of
+    /// zero. As an interval in each cylinder by itself it would not cancel; by the mean value theorem it does, up to the sliver. Source: ieee1788.
+    /// </remarks>
+    private WorstLimits Between(ReadOnlySpan<Interval> slopes, End low, End high)
+    {
+        const double rounding = 1e-12;
+        Interval rest = default;
+        bool proved = true;
+        for (int source = 0; source < _sources; source++)
+        {
+            Source own = _model.Sources[source];
+            if (!slopes[source].IsNonNegative && !slopes[source].IsNonPositive && own.WorstLow != own.WorstHigh)
+            {
+                rest += slopes[source] * new Interval(own.WorstLow, own.WorstHigh);
+                proved = false;
+            }
+        }
+
+        if (proved)
+        {
+            return new WorstLimits(low.Corner, high.Corner, Exact: true);
+        }
+
+        // Comparisons that a number without meaning fails leave the bound standing.
+        double nearLow = low.Corner + rest.Low, nearHigh = high.Corner + rest.High;
+        return new WorstLimits(
+            nearLow > low.Bound ? nearLow : low.Bound,
+            nearHigh < high.Bound ? nearHigh : high.Bound,
+            Exact: Math.Max(-rest.Low, rest.High) <= rounding * Math.Max(low.Size, high.Size));
+    }
+
     /// <summary>The output with each source at the end that makes the guiding figure extreme; a source of unproved direction is left as an interval.</summary>
     /// <param name="slopes">Slopes of the guiding figure: the output itself, a difference or a sum it takes part in.</param>
     /// <param name="upper">Whether the guiding figure is made greatest, else least.</param>
     /// <param name="opposite">Whether this output counts against the guiding figure, so that its bound is taken on the other side.</param>
-    private (double Value, bool Exact) Extreme(
+    private End Extreme(
         ReadOnlySpan<Interval> slopes, bool upper, int cylinder, int output, bool opposite = false)
     {
         CylinderForm form = _model.Cylinders[cylinder].Form;
@@ -178,14 +216,15 @@ public sealed class WorstCase
             bounds[input] = Interval.From(fixedPart) + loosePart;
         }
 
+        CylinderStack<Real>.Compute(corner, form, out CylinderStack<Real> stack);
+        double at = stack[output].Value;
         if (exact)
         {
-            CylinderStack<Real>.Compute(corner, form, out CylinderStack<Real> stack);
-            return (stack[output].Value, true);
+            return new End(at, at, Math.Abs(at));
         }
 
         CylinderStack<Interval>.Compute(bounds, form, out CylinderStack<Interval> bounded);
-        return (upper == opposite ? bounded[output].Low : bounded[output].High, false);
+        return new End(upper == opposite ? bounded[output].Low : bounded[output].High, at, Math.Abs(at));
     }
 
     private Interval Box(int cylinder, int input)
