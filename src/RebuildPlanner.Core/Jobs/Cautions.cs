@@ -125,7 +125,7 @@ public static class Cautions
                     "no-gauge", $"No gauge is named for the {word}: its resolution is taken from the digits written, its limit of error is unknown.",
                     Label(model, cylinder), word);
             }
-            else if (figure.Gauge.Split(", ").Any(id => gauges.TryGetValue(id, out Gauge? gauge) && gauge.LimitOfError is null))
+            else if (GaugesOf(figure).Any(id => gauges.TryGetValue(id!, out Gauge? gauge) && gauge.LimitOfError is null))
             {
                 yield return new Caution(
                     "no-limit-of-error", $"The gauge of the {word} has no limit of error: how far it may be off is unknown.", Label(model, cylinder), word);
@@ -150,7 +150,7 @@ public static class Cautions
                     "few-repeats", $"The {word} was repeated too seldom to know its scatter: the limits are very wide. Repeat more, or give the gauge its repeatability.",
                     Label(model, cylinder), word);
             }
-            else if (!model.Search.HasPool(figure.What, figure.Gauge))
+            else if (GaugesOf(figure).Any(gauge => !model.Search.HasPool(figure.What, gauge)))
             {
                 yield return new Caution(
                     "no-repeats", $"The {word} was not repeated and its gauge brings no repeatability: scatter is not in the result, nor in the worst case.",
@@ -171,6 +171,11 @@ public static class Cautions
         if (warm && engine.Heads.Any(head => head.Metal is null))
         {
             yield return new Caution("metal-assumed", "A head's metal is not recorded: readings at a temperature were corrected for aluminium.");
+        }
+
+        if (engine.RodMetal is null && model.Job.Readings.Any(reading => reading is { What: What.RodLength, Temperature: not null, Struck: null }))
+        {
+            yield return new Caution("metal-assumed", "The rods' metal is not recorded: their length was corrected for steel.");
         }
 
         if (engine.Altitude is null && model.Model.Cylinders.Any(cylinder => cylinder.Known[(int)Output.CrankingPressure]))
@@ -231,6 +236,9 @@ public static class Cautions
             "makers-limits-first",
             "Maker's limits, local codes and licensed practice come first. A probability here is belief from the stated figures, not a failure rate.");
     }
+
+    // One place may have been read with several gauges; none named is a pool of its own.
+    private static string?[] GaugesOf(Figure figure) => figure.Gauge is null ? new string?[1] : figure.Gauge.Split(", ");
 
     private static IEnumerable<int> Each(StageModel model, Func<int, bool> when) =>
         Enumerable.Range(0, model.Model.Cylinders.Count).Where(when);

@@ -40,7 +40,9 @@ public sealed class FigureSearch
     {
         if (!_found.TryGetValue((what, cylinder, at), out Figure? figure))
         {
-            figure = AtStage(what, cylinder, at) ?? (what == What.Deck ? _successors.DeckStack(cylinder, at) : null);
+            // The deck stack is for an engine with no deck figure at all, so it is made of what counts at the asked stage and never carried on.
+            bool stackMayServe = what == What.Deck && at == Parts.Stages[^1];
+            figure = AtStage(what, cylinder, at) ?? (stackMayServe ? _successors.DeckStack(cylinder, at) : null);
             _found[(what, cylinder, at)] = figure;
         }
 

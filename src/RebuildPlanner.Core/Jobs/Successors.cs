@@ -83,19 +83,14 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
 
     private Figure? FinishedBore(int cylinder, Stage stage)
     {
-        foreach (CutKind kind in _boreCuts)
+        // The last tool decides: what was bored before it was honed is only the boring size.
+        CutKind made = _boreCuts.First(kind => parts.Cuts(kind, cylinder, stage).Any());
+        (int index, Cut cut) = parts.Cuts(made, cylinder, stage).Last();
+        if (cut.Value is not null)
         {
-            foreach ((int index, Cut cut) in parts.Cuts(kind, cylinder, stage).Reverse())
-            {
-                if (cut.Value is not null)
-                {
-                    return new Figure(
-                        What.Bore, AmountOf(index, cut, cylinder), FigureKind.Computed, stage, CutWords.Of(kind), null, []);
-                }
-            }
+            return new Figure(What.Bore, AmountOf(index, cut, cylinder), FigureKind.Computed, stage, CutWords.Of(made), null, []);
         }
 
-        CutKind made = _boreCuts.First(kind => parts.Cuts(kind, cylinder, stage).Any());
         if (parts.Piston(cylinder, stage)?.Part is not { } piston)
         {
             return null;
@@ -269,11 +264,19 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
     // A piston put in where none was recorded is another one too: what was read before it was read on something else.
     private bool PistonChanged(int cylinder, Stage stage) => parts.Piston(cylinder, stage)?.Since == stage;
 
-    /// <summary>How far the crank rises at a stage: by line boring, or as read.</summary>
-    private Figure? Rise(int cylinder, Stage stage) =>
-        find(What.CrankRise, cylinder, stage) is { } read && read.Stage == stage
-            ? read
-            : Amounts(CutKind.LineBore, cylinder, stage).FirstOrDefault();
+    /// <summary>How far the crank rises at a stage: as read, or by all its line bores.</summary>
+    private Figure? Rise(int cylinder, Stage stage)
+    {
+        if (find(What.CrankRise, cylinder, stage) is { } read && read.Stage == stage)
+        {
+            return read;
+        }
+
+        Figure[] bores = [.. Amounts(CutKind.LineBore, cylinder, stage)];
+        return bores.Length == 0
+            ? null
+            : bores[0] with { Estimate = Estimate.Combine([.. bores.Select(bore => (1.0, bore.Estimate))]), RestsOn = bores.Length == 1 ? [] : bores };
+    }
 
     private IEnumerable<Figure> Amounts(CutKind kind, int cylinder, Stage stage) =>
         parts.Cuts(kind, cylinder, stage)

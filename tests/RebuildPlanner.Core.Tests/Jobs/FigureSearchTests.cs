@@ -129,7 +129,32 @@ public class FigureSearchTests
             """ "cuts": [ { "what": "deck cut", "value": "0.1 mm ± 0.01 mm", "stage": "as machined" } ] """);
 
         Assert.Equal(5.0, Workbench.Find(job, Stage.AsMachined, What.TopLandHeight)!.Estimate.Value);
-        Assert.Equal((FigureKind.Computed, 0.2), Kind(job, Stage.AsMachined, What.Deck));
+        Assert.Equal(0.2, Workbench.Find(job, Stage.AsMachined, What.Deck)!.Estimate.Value, 1e-12); // 0.30 less the cut alone
+    }
+
+    [Fact]
+    public void A_bore_that_is_honed_to_its_piston_is_not_left_at_the_boring_size()
+    {
+        Job job = Workbench.Single(
+            """ "parts": { "pistons": [ { "id": "os", "oversizeBore": "81.50 mm", "skirt": "81.46 mm ± 0.005 mm", "wantedClearance": "0.05 mm" } ] } """,
+            """ "fitted": [ { "stage": "planned", "piston": "os" } ] """,
+            """ "cuts": [ { "what": "bore", "cylinder": "1", "value": "81.41 mm", "stage": "planned" }, { "what": "hone", "cylinder": "1", "stage": "planned" } ] """);
+
+        Assert.Equal(81.51, Workbench.Find(job, Stage.Planned, What.Bore)!.Estimate.Value, 1e-9); // skirt 81.46 + clearance 0.05
+    }
+
+    [Fact]
+    public void A_block_height_read_anew_reaches_the_deck_stack()
+    {
+        Job job = Workbench.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "T" },
+              "engine": { "cylinders": 1, "stroke": "80 mm", "rodLength": "130 mm" },
+              "given": [ { "what": "compression height", "value": "30 mm" }, { "what": "block height", "value": "200.5 mm", "stage": "as received" },
+                { "what": "block height", "value": "200.3 mm", "stage": "as machined" } ] }
+            """);
+
+        Assert.Equal(0.3, Workbench.Find(job, Stage.AsMachined, What.Deck)!.Estimate.Value, 1e-9);
     }
 
     [Fact]
