@@ -59,7 +59,10 @@ public sealed class FigureSearch
         int index = Parts.Stages.ToList().IndexOf(at);
         Stage? before = index > 0 ? Parts.Stages[index - 1] : null;
         Figure? earlier = before is { } previous ? Find(what, cylinder, previous) : Throughout(what, cylinder);
-        bool ended = earlier is null ? what == What.Bore && BoredAt(cylinder, at) : _successors.Ends(earlier, cylinder, at);
+
+        // Cuts of earlier rebuilds lie behind every figure of this job: they end none.
+        bool ended = before is not null
+            && (earlier is null ? what == What.Bore && BoredAt(cylinder, at) : _successors.Ends(earlier, cylinder, at));
         Figure? computed = ended ? _successors.Carry(what, earlier, cylinder, at, before) : null;
         Figure? figure = computed ?? _stated.Given(what, cylinder, at) ?? _stated.Assumed(what, cylinder, at);
         if (figure is null && ended)

@@ -81,36 +81,29 @@ public sealed class StageFigures
     }
 
     /// <summary>Largest less smallest of an output, or null for one cylinder and where a cylinder lacks it: the missing one might be the extreme.</summary>
-    /// <remarks>First order by the extreme pair; the worst case over every pair.</remarks>
+    /// <remarks>
+    /// First order by the extreme pair; of pairs equally far apart the one in most doubt, for equal readings do not make equal cylinders.
+    /// The worst case over every pair.
+    /// </remarks>
     public LinearFigure? Spread(Output output)
     {
-        (int Cylinder, LinearFigure Figure)[] known =
-        [
-            .. Cylinders.Select(cylinder => (cylinder, Of(output, cylinder))).Where(each => each.Item2 is not null)!,
-        ];
-        if (known.Length < 2 || known.Length < _model.Model.Cylinders.Count)
+        LinearFigure?[] known = [.. Cylinders.Select(cylinder => Of(output, cylinder))];
+        if (known.Length < 2 || Array.Exists(known, figure => figure is null))
         {
             return null;
         }
 
-        (int _, LinearFigure largest) = known.MaxBy(each => each.Figure.Value);
-        (int _, LinearFigure smallest) = known.MinBy(each => each.Figure.Value);
-        WorstLimits worst = new(0.0, 0.0, Slack: 0.0);
-        foreach ((int up, LinearFigure _) in known)
-        {
-            foreach ((int down, LinearFigure _) in known)
-            {
-                if (up != down)
-                {
-                    WorstLimits pair = _worst.Difference(output, up, down);
-                    worst = new WorstLimits(Math.Max(worst.Low, pair.Low), Math.Max(worst.High, pair.High), Math.Max(worst.Slack, pair.Slack));
-                }
-            }
-        }
-
-        Term[] terms = [.. largest.Terms, .. smallest.Terms.Select(term => term with { Coefficient = -term.Coefficient })];
-        return new LinearFigure(largest.Value - smallest.Value, Row(terms), worst, terms);
+        (int Up, int Down)[] pairs = [.. Cylinders.SelectMany(up => Cylinders.Where(down => down != up).Select(down => (up, down)))];
+        (int up, int down) = pairs.MaxBy(pair => (known[pair.Up]!.Value - known[pair.Down]!.Value, DifferenceVariance(output, pair.Up, pair.Down)));
+        WorstLimits worst = pairs
+            .Select(pair => _worst.Difference(output, pair.Up, pair.Down))
+            .Aggregate((a, b) => new WorstLimits(Math.Max(a.Low, b.Low), Math.Max(a.High, b.High), Math.Max(a.Slack, b.Slack)));
+        Term[] terms = [.. known[up]!.Terms, .. known[down]!.Terms.Select(term => term with { Coefficient = -term.Coefficient })];
+        return new LinearFigure(known[up]!.Value - known[down]!.Value, Row(terms), worst, terms);
     }
+
+    private double DifferenceVariance(Output output, int up, int down) =>
+        FirstOrder.Covariance(output, up, up) + FirstOrder.Covariance(output, down, down) - (2.0 * FirstOrder.Covariance(output, up, down));
 
     /// <summary>Largest difference between depths on one axis, or null where the bore was not read at two depths, mm.</summary>
     public LinearFigure? Taper(int cylinder) => LargestDifference(cylinder, place => place.Axis, place => place.At);
@@ -136,20 +129,21 @@ public sealed class StageFigures
         where TOther : struct
     {
         IReadOnlyList<PlacedEstimate> places = _model.Search.Find(What.Bore, cylinder)?.Places ?? [];
-        LinearFigure? largest = null;
-        foreach (IGrouping<TGroup, PlacedEstimate> group in places.Where(place => other(place.Place) is not null).GroupBy(place => same(place.Place)))
+        (PlacedEstimate High, PlacedEstimate Low)[] pairs =
+        [
+            .. from high in places
+               from low in places
+               where Equals(same(high.Place), same(low.Place)) && other(high.Place) is not null && other(low.Place) is not null
+                   && !Equals(other(high.Place), other(low.Place))
+               select (high, low),
+        ];
+        if (pairs.Length == 0)
         {
-            PlacedEstimate high = group.MaxBy(place => place.Estimate.Value)!, low = group.MinBy(place => place.Estimate.Value)!;
-            if (group.DistinctBy(place => other(place.Place)).Count() < 2)
-            {
-                continue;
-            }
-
-            LinearFigure difference = Linear((1.0, high.Estimate), (-1.0, low.Estimate));
-            largest = largest is null || difference.Value > largest.Value ? difference : largest;
+            return null;
         }
 
-        return largest;
+        (PlacedEstimate largest, PlacedEstimate smallest) = pairs.MaxBy(pair => pair.High.Estimate.Value - pair.Low.Estimate.Value);
+        return Linear((1.0, largest.Estimate), (-1.0, smallest.Estimate));
     }
 
     private double[] Row(IEnumerable<Term> terms)

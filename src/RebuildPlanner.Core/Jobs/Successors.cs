@@ -23,6 +23,7 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
             What.Deck => Decked() || Piston() || Reached(),
             What.Crown or What.Skirt or What.CompressionHeight or What.TopLandHeight or What.TopLandDiameter or What.Rock => Piston(),
             What.RingGap => Piston() || Bored(),
+            What.GasketThickness or What.GasketOpening => Gasket(),
             What.WholeChamber => Bored() || HeadWorked() || Decked() || Piston() || Gasket() || Reached(),
             What.PistonToValve => HeadWorked() || Decked() || Piston() || Gasket(),
             What.HeadHeight => Made(CutKind.HeadSkim),

@@ -3,6 +3,9 @@ namespace RebuildPlanner.Core.Measuring;
 /// <summary>Volumes by burette and what temperature does to them.</summary>
 public static class Burette
 {
+    /// <summary>The glass of a burette of which none is recorded: common practice.</summary>
+    public const Glass UsualGlass = Glass.Borosilicate;
+
     /// <summary>Cubic expansion of a burette's glass, 1/°C.</summary>
     /// <remarks>Borosilicate 3.3: 9.9e-6; soda-lime: 27e-6. Source: iso4787. Valid for: 5 to 50 °C. Error: taken as exact.</remarks>
     public static double GlassExpansionPerC(Glass glass) => glass == Glass.Borosilicate ? 9.9e-6 : 27e-6;

@@ -35,7 +35,7 @@ public sealed record CorrectedReading(Reading Reading, double Value, double Fact
         double value, factor, perC;
         if (isVolume)
         {
-            double glass = gauge?.Glass is { } kind ? Burette.GlassExpansionPerC(kind) : 0.0;
+            double glass = Burette.GlassExpansionPerC(gauge?.Glass ?? Burette.UsualGlass);
             factor = Burette.FactorTo20C(glass, celsius, part, celsius);
             value = read * factor;
             perC = read * (glass - (3.0 * part));

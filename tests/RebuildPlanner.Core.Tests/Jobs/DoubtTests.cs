@@ -103,6 +103,18 @@ public class DoubtTests
         }
     }
 
+    // Both ends read 84.000 with half steps of ± 0.0005: a taper of 0 with u = 0.0005·√(2/3), the micrometer's error gone.
+    [Fact]
+    public void Equal_readings_do_not_prove_a_bore_without_taper()
+    {
+        Job job = Workbench.Engine(1, Gauges, $"\"readings\": [ {Bore("84.000 mm", "mic")}, {Bore("84.000 mm", "mic", "bottom")} ]");
+
+        ResultQuantity taper = StageResults.Of(job, Stage.AsReceived).Cylinders[0].Taper!;
+
+        Assert.Equal(0.0, taper.Value);
+        Assert.Equal(0.0005 * Math.Sqrt(2.0 / 3), taper.StandardUncertainty!.Value, 1e-12);
+    }
+
     [Fact]
     public void One_crank_is_one_doubt_and_rods_are_each_their_own()
     {

@@ -169,6 +169,27 @@ public class FigureSearchTests
     }
 
     [Fact]
+    public void A_cut_of_an_earlier_rebuild_ends_no_figure_of_this_job()
+    {
+        Job job = Workbench.Single(""" "cuts": [ { "what": "head skim", "value": "0.20 mm ± 0.02 mm", "stage": "before" } ] """);
+
+        Assert.Equal((FigureKind.Given, 36e3), Kind(job, Stage.AsReceived, What.Chamber));
+    }
+
+    [Fact]
+    public void Another_gasket_ends_what_was_read_of_the_old_one()
+    {
+        Job job = Workbench.Single(
+            """ "readings": [ { "what": "gasket thickness", "value": "1.31 mm", "stage": "as received" } ] """,
+            """ "given": [ { "what": "bore", "value": "81 mm ± 0.01 mm" } ] """,
+            """ "parts": { "gaskets": [ { "id": "old", "thickness": "1.3 mm ± 0.05 mm" }, { "id": "new", "opening": "83 mm ± 0.2 mm" } ] } """,
+            """ "fitted": [ { "stage": "as received", "gasket": "old" }, { "stage": "as machined", "gasket": "new" } ] """);
+
+        Assert.Equal((FigureKind.Measured, 1.31), Kind(job, Stage.AsReceived, What.GasketThickness));
+        Assert.Null(Workbench.Find(job, Stage.AsMachined, What.GasketThickness));
+    }
+
+    [Fact]
     public void A_piece_brings_its_own_readings_to_the_cylinder_it_goes_into()
     {
         Job job = Workbench.Engine(
