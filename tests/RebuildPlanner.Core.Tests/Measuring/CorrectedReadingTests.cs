@@ -16,7 +16,7 @@ public class CorrectedReadingTests
         double With(double alpha) => 42_000 * Burette.FactorTo20C(9.9e-6, WarmC, alpha, WarmC);
         (CorrectedReading corrected, SourceBook book) = Correct(What.Chamber, "42 cc", Metal.Aluminium);
 
-        Assert.Equal((With(21.5e-6 + Step) - With(21.5e-6 - Step)) / (2 * Step), Slope(corrected, book, 2.15e-6), 2000); // second order in 3α·Δt: 1e-3 of 7.6e5
+        Assert.Equal((With(21.5e-6 + Step) - With(21.5e-6 - Step)) / (2 * Step), Slope(corrected, book, 2.15e-6), 2000.0); // second order in 3α·Δt: 1e-3 of 7.6e5
     }
 
     [Fact]
