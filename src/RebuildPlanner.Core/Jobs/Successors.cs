@@ -10,6 +10,8 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
 {
     private static readonly CutKind[] _boreCuts = [CutKind.Hone, CutKind.Bore, CutKind.Sleeve];
 
+    private readonly CutAmounts _amounts = new(job, parts, book);
+
     /// <summary>Whether what was done at a stage ends an earlier figure.</summary>
     /// <param name="earlier">The figure, of an earlier stage or holding throughout.</param>
     /// <param name="cylinder">The cylinder's index.</param>
@@ -56,10 +58,10 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
         (What.Bore, _) => FinishedBore(cylinder, stage),
         (What.Chamber, not null) => Chamber(earlier, cylinder, stage),
         (What.Deck, not null) => Deck(earlier, cylinder, stage, before),
-        (What.HeadHeight, not null) => Less(earlier, stage, [.. Amounts(CutKind.HeadSkim, cylinder, stage)]),
-        (What.DeckHeight or What.BarrelHeight, not null) => Less(earlier, stage, [.. Amounts(CutKind.DeckCut, cylinder, stage)]),
+        (What.HeadHeight, not null) => Less(earlier, stage, [.. _amounts.Of(CutKind.HeadSkim, cylinder, stage)]),
+        (What.DeckHeight or What.BarrelHeight, not null) => Less(earlier, stage, [.. _amounts.Of(CutKind.DeckCut, cylinder, stage)]),
         (What.BlockHeight, not null) => Less(
-            earlier, stage, [.. Amounts(CutKind.DeckCut, cylinder, stage), .. Rise(cylinder, stage) is { } rise ? [rise] : Array.Empty<Figure>()]),
+            earlier, stage, [.. _amounts.Of(CutKind.DeckCut, cylinder, stage), .. Rise(cylinder, stage) is { } rise ? [rise] : Array.Empty<Figure>()]),
         _ => null,
     };
 
@@ -89,7 +91,7 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
         (int index, Cut cut) = parts.Cuts(made, cylinder, stage).Last();
         if (cut.Value is not null)
         {
-            return new Figure(What.Bore, AmountOf(index, cut, cylinder), FigureKind.Computed, stage, CutWords.Of(made), null, []);
+            return new Figure(What.Bore, _amounts.Of(index, cut, cylinder), FigureKind.Computed, stage, CutWords.Of(made), null, []);
         }
 
         if (parts.Piston(cylinder, stage)?.Part is not { } piston)
@@ -102,13 +104,13 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
         double? sizeMm = skirtMm is { } skirt && piston.WantedClearance is { } clearance ? skirt + clearance.Midpoint : piston.OversizeBore?.Midpoint;
         return sizeMm is { } size
             ? new Figure(
-                What.Bore, WithProcess(size, made, What.Bore, ("bored", parts.Label(cylinder), stage)), FigureKind.Computed, stage, CutWords.Of(made), null, [])
+                What.Bore, _amounts.Setting(size, made, What.Bore, ("bored", parts.Label(cylinder), stage)), FigureKind.Computed, stage, CutWords.Of(made), null, [])
             : null;
     }
 
     private Figure? Chamber(Figure earlier, int cylinder, Stage stage)
     {
-        Figure[] skims = [.. Amounts(CutKind.HeadSkim, cylinder, stage)];
+        Figure[] skims = [.. _amounts.Of(CutKind.HeadSkim, cylinder, stage)];
         List<(double, Estimate)> sum = [(1.0, earlier.Estimate)];
         List<Figure> restsOn = [earlier, .. skims];
         if (skims.Length > 0)
@@ -132,7 +134,7 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
                     return null;
                 }
 
-                Estimate sink = OfValve(What.ValveSink, valve) ?? AmountOf(index, cut, cylinder);
+                Estimate sink = OfValve(What.ValveSink, valve) ?? _amounts.Of(index, cut, cylinder);
                 sum.Add((ValvesOf(valve), DerivedEstimate.Of<DiscVolume>(book, What.ValveSink, diameter, sink)));
             }
         }
@@ -178,7 +180,7 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
             Add(-1.0, fresh);
         }
 
-        foreach (Figure cut in Amounts(CutKind.DeckCut, cylinder, stage))
+        foreach (Figure cut in _amounts.Of(CutKind.DeckCut, cylinder, stage))
         {
             Add(-1.0, cut);
         }
@@ -273,49 +275,10 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
             return read;
         }
 
-        Figure[] bores = [.. Amounts(CutKind.LineBore, cylinder, stage)];
+        Figure[] bores = [.. _amounts.Of(CutKind.LineBore, cylinder, stage)];
         return bores.Length == 0
             ? null
             : bores[0] with { Estimate = Estimate.Combine([.. bores.Select(bore => (1.0, bore.Estimate))]), RestsOn = bores.Length == 1 ? [] : bores };
-    }
-
-    private IEnumerable<Figure> Amounts(CutKind kind, int cylinder, Stage stage) =>
-        parts.Cuts(kind, cylinder, stage)
-            .Where(cut => cut.Cut.Value is not null)
-            .Select(cut => new Figure(
-                CutWords.WhatOf(kind), AmountOf(cut.Index, cut.Cut, cylinder), FigureKind.Given, stage, CutWords.Of(kind), null, []));
-
-    private Estimate AmountOf(int index, Cut cut, int cylinder)
-    {
-        object owner = cut.Kind switch
-        {
-            CutKind.HeadSkim => parts.Head(cylinder).Label,
-            CutKind.DeckCut => parts.Bank(cylinder),
-            CutKind.LineBore => "engine",
-            _ => parts.Label(cylinder),
-        };
-        What what = CutWords.WhatOf(cut.Kind);
-        return cut.Value is { Limits: null } bare
-            ? WithProcess(bare.Value, cut.Kind, what, ("cut", index, owner))
-            : StatedFigures.EstimateOf(cut.Value!, what, ("cut", index, owner), book);
-    }
-
-    /// <summary>A setting with the process tolerance as its doubt; a cut of zero has none.</summary>
-    private Estimate WithProcess(double value, CutKind kind, What what, object identity)
-    {
-        if (value == 0.0)
-        {
-            return Estimate.Zero;
-        }
-
-        double? toleranceMm = job.Processes.LastOrDefault(process => process.Kind == kind && process.Tolerance is not null)?.Tolerance!.Midpoint;
-        Source source = toleranceMm switch
-        {
-            null => Source.Unstated,
-            > 0.0 and double halfWidth => Source.Rectangular(halfWidth),
-            _ => Source.WorstOnly(0.0, 0.0),
-        };
-        return new Estimate(value, [new Term(book.Shared((what, identity), source), 1.0, what)]);
     }
 
     private readonly struct Product : IFormula

@@ -66,6 +66,19 @@ public class LayoutTests
         Assert.Equal((0.0, Math.Round(300 * Math.Sqrt(2.0 / 3), 9)), (chambers.Value, Math.Round(chambers.StandardUncertainty!.Value, 9)));
     }
 
+    // ISO 2533: at 1000 m the air has 0.887 of its sea-level pressure, and the gauge shows that part of what it shows at sea level.
+    [Fact]
+    public void Cranking_pressure_falls_with_the_air_of_the_altitude()
+    {
+        double At(string altitude) => StageResults.Of(
+            Workbench.Single(
+                $$""" "engine": { "cylinders": 1, "stroke": "78 mm ± 0.04 mm", "rodLength": "132 mm", "cam": { "inletCloses": "46 deg ABDC" }, "altitude": "{{altitude}}" } """),
+            Stage.AsReceived).Cylinders[0].CrankingPressure!.Value;
+
+        Assert.Equal(0.887, At("1000 m") / At("0 m"), 5e-4);
+        Assert.Equal(At("1000 ft"), At("304.8 m"), 1e-6);
+    }
+
     // Exhaust closes 86° before top: by the triangle of r 27, L 110 without offset, x = L + r − r·cos θ − √(L² − r²·sin² θ), θ = 86°.
     [Fact]
     public void A_two_stroke_traps_its_charge_at_exhaust_closing()
