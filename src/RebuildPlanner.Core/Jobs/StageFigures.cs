@@ -69,7 +69,7 @@ public sealed class StageFigures
         }
 
         return new LinearFigure(
-            FirstOrder.Value(cylinder, output), FirstOrder.Row(cylinder, output).ToArray(), _worst.Limits(cylinder, output), terms);
+            FirstOrder.Value(cylinder, output), FirstOrder.Row(cylinder, output), _worst.Limits(cylinder, output), terms);
     }
 
     /// <summary>A figure that is linear in what was measured, as it stands or combined.</summary>

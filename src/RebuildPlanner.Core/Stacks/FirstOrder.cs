@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+using System.Runtime.Intrinsics;
 using RebuildPlanner.Core.Cylinders;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Measuring;
@@ -7,7 +9,7 @@ namespace RebuildPlanner.Core.Stacks;
 
 /// <summary>First order: every output of every cylinder, its sensitivities to every source, covariance between cylinders and shares of the ratio.</summary>
 /// <remarks>
-/// One dual pass for each input that carries doubt, then the chain rule through its terms. The arrays are made once;
+/// One pass for every eight inputs that carry doubt, then the chain rule through their terms. The arrays are made once;
 /// <see cref="Evaluate"/> allocates nothing. Source: jcgm100 (5.1, 5.2).
 /// </remarks>
 public sealed class FirstOrder
@@ -18,12 +20,15 @@ public sealed class FirstOrder
     private const int Inputs = CylinderFigures<Real>.Count;
     private const int Outputs = CylinderStack<Real>.Count;
 
+    // Outputs stand side by side, rounded up to whole registers: one multiplication serves eight of them.
+    private const int Width = (Outputs + Slopes.Count - 1) / Slopes.Count * Slopes.Count;
+
     private readonly EngineModel _model;
-    private readonly int _sources;
     private readonly int _cylinders;
+    private readonly SourceSlots _slots;
     private readonly double[] _values;
     private readonly double[] _jacobian;
-    private readonly double[] _rows;
+    private readonly double[][] _rows;
     private readonly double[] _covariances;
     private readonly double[] _shares;
 
@@ -31,12 +36,17 @@ public sealed class FirstOrder
     public FirstOrder(EngineModel model)
     {
         _model = model;
-        _sources = model.Sources.Length;
         _cylinders = model.Cylinders.Count;
+        _slots = new SourceSlots(model);
         _values = new double[_cylinders * Outputs];
-        _jacobian = new double[_cylinders * Outputs * Inputs];
-        _rows = new double[_cylinders * Outputs * _sources];
-        _covariances = new double[Outputs * _cylinders * _cylinders];
+        _jacobian = new double[_cylinders * Inputs * Width];
+        _rows = new double[_cylinders][];
+        for (int cylinder = 0; cylinder < _cylinders; cylinder++)
+        {
+            _rows[cylinder] = new double[_slots.Variances(cylinder).Length * Width];
+        }
+
+        _covariances = new double[_cylinders * _cylinders * Width];
         _shares = new double[_cylinders * WhatCount];
         Evaluate();
     }
@@ -44,16 +54,26 @@ public sealed class FirstOrder
     /// <summary>The output at the estimates, coherent unit.</summary>
     public double Value(int cylinder, Output output) => _values[(cylinder * Outputs) + (int)output];
 
-    /// <summary>Change of the output for a unit of each source.</summary>
-    public ReadOnlySpan<double> Row(int cylinder, Output output) => RowSpan(cylinder, (int)output);
+    /// <summary>Change of the output for a unit of each source, in a new array.</summary>
+    public double[] Row(int cylinder, Output output)
+    {
+        double[] row = new double[_model.Sources.Length];
+        for (int source = 0; source < row.Length; source++)
+        {
+            int slot = _slots.Of(cylinder, source);
+            row[source] = slot < 0 ? 0.0 : _rows[cylinder][(slot * Width) + (int)output];
+        }
+
+        return row;
+    }
 
     /// <summary>Change of the output for a unit of one input.</summary>
     public double Sensitivity(int cylinder, Output output, Input input) =>
-        _jacobian[(((cylinder * Outputs) + (int)output) * Inputs) + (int)input];
+        _jacobian[(((cylinder * Inputs) + (int)input) * Width) + (int)output];
 
     /// <summary>Covariance of one output between two cylinders, coherent unit squared.</summary>
     public double Covariance(Output output, int cylinder, int otherCylinder) =>
-        _covariances[((((int)output * _cylinders) + cylinder) * _cylinders) + otherCylinder];
+        _covariances[(((Math.Max(cylinder, otherCylinder) * _cylinders) + Math.Min(cylinder, otherCylinder)) * Width) + (int)output];
 
     /// <summary>Standard uncertainty of the output, coherent unit.</summary>
     public double StandardUncertainty(int cylinder, Output output) => Math.Sqrt(Covariance(output, cylinder, cylinder));
@@ -64,61 +84,80 @@ public sealed class FirstOrder
     /// <summary>Computes everything again from the model.</summary>
     public void Evaluate()
     {
-        Array.Clear(_rows);
         Array.Clear(_jacobian);
         Array.Clear(_shares);
         for (int cylinder = 0; cylinder < _cylinders; cylinder++)
         {
             Differentiate(cylinder);
+            Chain(cylinder);
             ShareOut(cylinder);
-        }
-
-        for (int output = 0; output < Outputs; output++)
-        {
-            Covary(output);
+            Covary(cylinder);
         }
     }
 
+    /// <summary>Sensitivities to the inputs, a register of inputs a pass.</summary>
     private void Differentiate(int cylinder)
     {
-        CylinderForm form = _model.Cylinders[cylinder].Form;
         _model.Values(cylinder, out CylinderFigures<Real> values);
-        CylinderFigures<Dual<Real>> duals = default;
-        for (int input = 0; input < Inputs; input++)
+        Span<int> seeded = stackalloc int[Slopes.Count];
+        int input = 0;
+        do
         {
-            duals[input] = new Dual<Real>(values[input], default);
-        }
-
-        CylinderStack<Real>.Compute(values, form, out CylinderStack<Real> plain);
-        for (int output = 0; output < Outputs; output++)
-        {
-            _values[(cylinder * Outputs) + output] = plain[output].Value;
-        }
-
-        for (int input = 0; input < Inputs; input++)
-        {
-            ReadOnlySpan<Term> terms = _model.TermsOf(cylinder, input);
-            if (terms.IsEmpty)
+            int count = 0;
+            for (; input < Inputs && count < Slopes.Count; input++)
             {
-                continue;
+                if (!_model.TermsOf(cylinder, input).IsEmpty)
+                {
+                    seeded[count++] = input;
+                }
             }
 
-            duals[input] = new Dual<Real>(values[input], Real.From(1.0));
-            CylinderStack<Dual<Real>>.Compute(duals, form, out CylinderStack<Dual<Real>> stack);
-            duals[input] = new Dual<Real>(values[input], default);
-            for (int output = 0; output < Outputs; output++)
-            {
-                double slope = stack[output].Derivative.Value;
-                if (slope == 0.0)
-                {
-                    continue;
-                }
+            Pass(cylinder, values, seeded[..count]);
+        }
+        while (input < Inputs);
+    }
 
-                _jacobian[(((cylinder * Outputs) + output) * Inputs) + input] = slope;
-                Span<double> row = RowSpan(cylinder, output);
-                foreach (Term term in terms)
+    private void Pass(int cylinder, in CylinderFigures<Real> values, ReadOnlySpan<int> seeded)
+    {
+        Unsafe.SkipInit(out CylinderFigures<Slopes> figures);
+        for (int input = 0; input < Inputs; input++)
+        {
+            figures[input] = Slopes.From(values[input].Value);
+        }
+
+        for (int place = 0; place < seeded.Length; place++)
+        {
+            figures[seeded[place]] = Slopes.Seed(values[seeded[place]].Value, place);
+        }
+
+        CylinderStack<Slopes>.Compute(figures, _model.Cylinders[cylinder].Form, out CylinderStack<Slopes> stack);
+        Span<double> slopes = stackalloc double[Slopes.Count];
+        Span<double> jacobian = _jacobian.AsSpan(cylinder * Inputs * Width, Inputs * Width);
+        for (int output = 0; output < Outputs; output++)
+        {
+            _values[(cylinder * Outputs) + output] = stack[output].Value;
+            stack[output].Derivatives.CopyTo(slopes);
+            for (int place = 0; place < seeded.Length; place++)
+            {
+                jacobian[(seeded[place] * Width) + output] = slopes[place];
+            }
+        }
+    }
+
+    /// <summary>The chain rule through the terms: sensitivities to the sources, of all outputs at once.</summary>
+    private void Chain(int cylinder)
+    {
+        Span<double> rows = _rows[cylinder];
+        rows.Clear();
+        for (int input = 0; input < Inputs; input++)
+        {
+            ReadOnlySpan<double> slopes = _jacobian.AsSpan(((cylinder * Inputs) + input) * Width, Width);
+            foreach (Term term in _model.TermsOf(cylinder, input))
+            {
+                Span<double> row = rows.Slice(_slots.Of(cylinder, term.Source) * Width, Width);
+                for (int lane = 0; lane < Width; lane += Vector512<double>.Count)
                 {
-                    row[term.Source] += slope * term.Coefficient;
+                    (Vector512.Create(row[lane..]) + (Vector512.Create(slopes[lane..]) * term.Coefficient)).CopyTo(row[lane..]);
                 }
             }
         }
@@ -126,8 +165,8 @@ public sealed class FirstOrder
 
     private void ShareOut(int cylinder)
     {
-        ReadOnlySpan<double> row = RowSpan(cylinder, (int)Output.CompressionRatio);
-        ReadOnlySpan<double> variances = _model.Variances;
+        ReadOnlySpan<double> rows = _rows[cylinder];
+        ReadOnlySpan<double> variances = _slots.Variances(cylinder);
         Span<double> shares = _shares.AsSpan(cylinder * WhatCount, WhatCount);
         double total = 0.0;
         for (int input = 0; input < Inputs; input++)
@@ -140,7 +179,8 @@ public sealed class FirstOrder
 
             foreach (Term term in _model.TermsOf(cylinder, input))
             {
-                double part = slope * term.Coefficient * row[term.Source] * variances[term.Source];
+                int slot = _slots.Of(cylinder, term.Source);
+                double part = slope * term.Coefficient * rows[(slot * Width) + (int)Output.CompressionRatio] * variances[slot];
                 shares[(int)term.What] += part;
                 total += part;
             }
@@ -152,18 +192,15 @@ public sealed class FirstOrder
         }
     }
 
-    private void Covary(int output)
+    /// <summary>Covariances with the cylinders before and with itself.</summary>
+    private void Covary(int cylinder)
     {
-        for (int cylinder = 0; cylinder < _cylinders; cylinder++)
+        for (int other = 0; other <= cylinder; other++)
         {
-            for (int other = 0; other <= cylinder; other++)
-            {
-                double covariance = Propagation.Covariance(_model.Sources, RowSpan(cylinder, output), RowSpan(other, output));
-                _covariances[(((output * _cylinders) + cylinder) * _cylinders) + other] = covariance;
-                _covariances[(((output * _cylinders) + other) * _cylinders) + cylinder] = covariance;
-            }
+            // Two cylinders vary together by what they share, and by that alone; with itself a cylinder shares everything.
+            ReadOnlySpan<double> variances = other == cylinder ? _slots.Variances(cylinder) : _slots.Variances(cylinder)[.._slots.Shared];
+            Propagation.Covariances(
+                variances, _rows[cylinder], _rows[other], _covariances.AsSpan(((cylinder * _cylinders) + other) * Width, Width));
         }
     }
-
-    private Span<double> RowSpan(int cylinder, int output) => _rows.AsSpan(((cylinder * Outputs) + output) * _sources, _sources);
 }

@@ -16,6 +16,8 @@ internal static class FirstOrderBenchmark
     // Both compute in doubles, in another order: the values differ by rounding, u and covariance by rounding of sums that nearly cancel.
     private const double ValueTolerance = 1e-9, DoubtTolerance = 1e-6;
 
+    private static readonly string[] _pythons = ["/usr/bin/python3", "python3"];
+
     private const int Rounds = 15, CallsPerRound = 2000;
 
     /// <summary>Runs it.</summary>
@@ -32,7 +34,7 @@ internal static class FirstOrderBenchmark
         if (answer is not { } rival)
         {
             Console.WriteLine(Invariant($"first order: ours {seconds * 1e6:0.0} µs"));
-            Console.WriteLine("first order: no rival, skipped. It is the package python3-uncertainties, for the python3 on the path or in PYTHON.");
+            Console.WriteLine("first order: no rival, skipped. It is the package python3-uncertainties, for the system's python3.");
             return true;
         }
 
@@ -79,18 +81,27 @@ internal static class FirstOrderBenchmark
         try
         {
             ModelFile.Write(model, path);
-            string python = Environment.GetEnvironmentVariable("PYTHON") ?? "python3";
+
+            // The Debian package serves the system's own python, which need not be the first on the path.
+            return _pythons.Select(python => Ask(python, path)).FirstOrDefault(answer => answer is not null);
+        }
+        finally
+        {
+            File.Delete(path);
+        }
+    }
+
+    private static JsonElement? Ask(string python, string modelPath)
+    {
+        try
+        {
             string script = Path.Combine(AppContext.BaseDirectory, "FirstOrder", "rival_first_order.py");
-            JsonElement answer = JsonDocument.Parse(Tool.Output(python, script, path)).RootElement;
+            JsonElement answer = JsonDocument.Parse(Tool.Output(python, script, modelPath)).RootElement;
             return answer.TryGetProperty("missing", out _) ? null : answer;
         }
         catch (System.ComponentModel.Win32Exception)
         {
             return null;
-        }
-        finally
-        {
-            File.Delete(path);
         }
     }
 

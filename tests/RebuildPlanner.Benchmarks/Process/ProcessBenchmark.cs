@@ -75,10 +75,15 @@ internal static class ProcessBenchmark
     private static string Publish(string project, string to, string name)
     {
         Tool.Output(
-            "dotnet", "publish", project, "-c", "Release", "-r", RuntimeInformation.RuntimeIdentifier, "--self-contained", "false",
+            "dotnet", "publish", project, "-c", "Release", "-r", Machine(), "--self-contained", "false",
             "-p:PublishReadyToRun=true", "-o", to, "-v", "quiet", "-nologo");
         return Path.Combine(to, OperatingSystem.IsWindows() ? $"{name}.exe" : name);
     }
+
+    // Not the SDK's own identifier, which on some distributions names the distribution.
+    private static string Machine() =>
+        (OperatingSystem.IsWindows() ? "win-" : OperatingSystem.IsMacOS() ? "osx-" : "linux-")
+        + RuntimeInformation.OSArchitecture.ToString().ToLowerInvariant();
 
     private static string Resource(string name)
     {
