@@ -21,6 +21,7 @@ public sealed class EngineModel
     private readonly Estimate[] _estimates;
     private readonly Term[] _terms;
     private readonly int[] _firstTerm;
+    private readonly int[] _firstWorstOnly;
     private readonly CylinderModel[] _cylinders;
     private readonly int[] _estimateOf;
 
@@ -33,12 +34,19 @@ public sealed class EngineModel
         _sources = [.. sources];
         _variances = [.. sources.Select(source => source.StandardUncertainty * source.StandardUncertainty)];
         _estimates = [.. estimates];
-        _terms = [.. estimates.SelectMany(estimate => estimate.Terms)];
         _firstTerm = new int[estimates.Count + 1];
+        _firstWorstOnly = new int[estimates.Count];
+        List<Term> terms = [];
         for (int estimate = 0; estimate < estimates.Count; estimate++)
         {
-            _firstTerm[estimate + 1] = _firstTerm[estimate] + estimates[estimate].Terms.Count;
+            ILookup<bool, Term> worstOnly = Together(estimates[estimate].Terms).ToLookup(term => sources[term.Source].Shape == SourceShape.None);
+            terms.AddRange(worstOnly[false]);
+            _firstWorstOnly[estimate] = terms.Count;
+            terms.AddRange(worstOnly[true]);
+            _firstTerm[estimate + 1] = terms.Count;
         }
+
+        _terms = [.. terms];
 
         _cylinders = [.. cylinders];
         _estimateOf = [.. cylinders.SelectMany(cylinder => cylinder.EstimateOf)];
@@ -56,11 +64,18 @@ public sealed class EngineModel
     /// <summary>The estimate behind one input of one cylinder.</summary>
     public Estimate EstimateOf(int cylinder, Input input) => _estimates[EstimateIndex(cylinder, (int)input)];
 
-    /// <summary>The doubts of one input of one cylinder.</summary>
+    /// <summary>The doubts of one input of one cylinder, those that count in the worst case alone last.</summary>
     public ReadOnlySpan<Term> TermsOf(int cylinder, int input)
     {
         int estimate = EstimateIndex(cylinder, input);
         return _terms.AsSpan(_firstTerm[estimate].._firstTerm[estimate + 1]);
+    }
+
+    /// <summary>Of these, the doubts that have a distribution or bar proof: all that first order reads.</summary>
+    public ReadOnlySpan<Term> DoubtsOf(int cylinder, int input)
+    {
+        int estimate = EstimateIndex(cylinder, input);
+        return _terms.AsSpan(_firstTerm[estimate].._firstWorstOnly[estimate]);
     }
 
     /// <summary>The best values of one cylinder's inputs.</summary>
@@ -72,6 +87,13 @@ public sealed class EngineModel
             figures[input] = new Real(_estimates[EstimateIndex(cylinder, input)].Value);
         }
     }
+
+    // Six places of a bore name their gauge's error six times: added up once here, not in every pass.
+    private static IEnumerable<Term> Together(IReadOnlyList<Term> terms) =>
+        terms
+            .GroupBy(term => (term.Source, term.What))
+            .Select(same => new Term(same.Key.Source, same.Sum(term => term.Coefficient), same.Key.What))
+            .Where(term => term.Coefficient != 0.0);
 
     private int EstimateIndex(int cylinder, int input) => _estimateOf[(cylinder * CylinderFigures<Real>.Count) + input];
 }

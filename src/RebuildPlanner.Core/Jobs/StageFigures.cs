@@ -62,7 +62,7 @@ public sealed class StageFigures
                 continue;
             }
 
-            foreach (Term term in _model.Model.TermsOf(cylinder, input))
+            foreach (Term term in _model.Model.DoubtsOf(cylinder, input))
             {
                 terms.Add(term with { Coefficient = slope * term.Coefficient });
             }

@@ -1,4 +1,5 @@
 using System.Runtime.CompilerServices;
+using System.Runtime.InteropServices;
 using System.Runtime.Intrinsics;
 using RebuildPlanner.Core.Cylinders;
 using RebuildPlanner.Core.Jobs;
@@ -21,7 +22,8 @@ public sealed class FirstOrder
     private const int Outputs = CylinderStack<Real>.Count;
 
     // Outputs stand side by side, rounded up to whole registers: one multiplication serves eight of them.
-    private const int Width = (Outputs + Slopes.Count - 1) / Slopes.Count * Slopes.Count;
+    private const int Registers = (Outputs + Slopes.Count - 1) / Slopes.Count;
+    private const int Width = Registers * Slopes.Count;
 
     private readonly EngineModel _model;
     private readonly int _cylinders;
@@ -84,14 +86,13 @@ public sealed class FirstOrder
     /// <summary>Computes everything again from the model.</summary>
     public void Evaluate()
     {
-        Array.Clear(_jacobian);
         Array.Clear(_shares);
         for (int cylinder = 0; cylinder < _cylinders; cylinder++)
         {
             Differentiate(cylinder);
             Chain(cylinder);
-            ShareOut(cylinder);
             Covary(cylinder);
+            ShareOut(cylinder);
         }
     }
 
@@ -106,7 +107,7 @@ public sealed class FirstOrder
             int count = 0;
             for (; input < Inputs && count < Slopes.Count; input++)
             {
-                if (!_model.TermsOf(cylinder, input).IsEmpty)
+                if (!_model.DoubtsOf(cylinder, input).IsEmpty)
                 {
                     seeded[count++] = input;
                 }
@@ -117,6 +118,8 @@ public sealed class FirstOrder
         while (input < Inputs);
     }
 
+    // On its own: taken into its caller, the compiler's patience with inlining ends in the middle of the formulas.
+    [MethodImpl(MethodImplOptions.NoInlining)]
     private void Pass(int cylinder, in CylinderFigures<Real> values, ReadOnlySpan<int> seeded)
     {
         Unsafe.SkipInit(out CylinderFigures<Slopes> figures);
@@ -147,17 +150,18 @@ public sealed class FirstOrder
     /// <summary>The chain rule through the terms: sensitivities to the sources, of all outputs at once.</summary>
     private void Chain(int cylinder)
     {
-        Span<double> rows = _rows[cylinder];
+        Span<Vector512<double>> rows = MemoryMarshal.Cast<double, Vector512<double>>(_rows[cylinder].AsSpan());
+        ReadOnlySpan<Vector512<double>> jacobian =
+            MemoryMarshal.Cast<double, Vector512<double>>(_jacobian.AsSpan(cylinder * Inputs * Width, Inputs * Width));
         rows.Clear();
         for (int input = 0; input < Inputs; input++)
         {
-            ReadOnlySpan<double> slopes = _jacobian.AsSpan(((cylinder * Inputs) + input) * Width, Width);
-            foreach (Term term in _model.TermsOf(cylinder, input))
+            foreach (Term term in _model.DoubtsOf(cylinder, input))
             {
-                Span<double> row = rows.Slice(_slots.Of(cylinder, term.Source) * Width, Width);
-                for (int lane = 0; lane < Width; lane += Vector512<double>.Count)
+                int slot = _slots.Of(cylinder, term.Source);
+                for (int part = 0; part < Registers; part++)
                 {
-                    (Vector512.Create(row[lane..]) + (Vector512.Create(slopes[lane..]) * term.Coefficient)).CopyTo(row[lane..]);
+                    rows[(slot * Registers) + part] += jacobian[(input * Registers) + part] * term.Coefficient;
                 }
             }
         }
@@ -168,7 +172,7 @@ public sealed class FirstOrder
         ReadOnlySpan<double> rows = _rows[cylinder];
         ReadOnlySpan<double> variances = _slots.Variances(cylinder);
         Span<double> shares = _shares.AsSpan(cylinder * WhatCount, WhatCount);
-        double total = 0.0;
+        double total = Covariance(Output.CompressionRatio, cylinder, cylinder);
         for (int input = 0; input < Inputs; input++)
         {
             double slope = Sensitivity(cylinder, Output.CompressionRatio, (Input)input);
@@ -177,18 +181,18 @@ public sealed class FirstOrder
                 continue;
             }
 
-            foreach (Term term in _model.TermsOf(cylinder, input))
+            foreach (Term term in _model.DoubtsOf(cylinder, input))
             {
                 int slot = _slots.Of(cylinder, term.Source);
-                double part = slope * term.Coefficient * rows[(slot * Width) + (int)Output.CompressionRatio] * variances[slot];
-                shares[(int)term.What] += part;
-                total += part;
+                shares[(int)term.What] +=
+                    slope * term.Coefficient * rows[(slot * Width) + (int)Output.CompressionRatio] * variances[slot];
             }
         }
 
-        for (int what = 0; total > 0.0 && what < WhatCount; what++)
+        double perUnit = total > 0.0 ? 1.0 / total : 0.0;
+        for (int what = 0; what < WhatCount; what++)
         {
-            shares[what] /= total;
+            shares[what] *= perUnit;
         }
     }
 

@@ -23,7 +23,7 @@ internal sealed class SourceSlots
         {
             for (int input = 0; input < CylinderFigures<Real>.Count; input++)
             {
-                foreach (Term term in model.TermsOf(cylinder, input))
+                foreach (Term term in model.DoubtsOf(cylinder, input))
                 {
                     ref int slot = ref _slots[(cylinder * _sources) + term.Source];
                     touchedBy[term.Source] += slot < 0 ? 1 : 0;
