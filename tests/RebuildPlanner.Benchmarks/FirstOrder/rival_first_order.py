@@ -62,12 +62,12 @@ def stack(f):
 
 
 def evaluate(cylinders):
-    """What is timed: values and u of all outputs, covariance of the ratios, shares of each ratio's variance."""
+    """What is timed: values and u of all outputs, covariance of each between the cylinders, shares of each ratio's variance."""
     stacks = [stack(cylinder) for cylinder in cylinders]
     values = [[y.nominal_value for y in outputs] for outputs in stacks]
     u = [[y.std_dev for y in outputs] for outputs in stacks]
     ratios = [outputs[OUTPUTS.index("CompressionRatio")] for outputs in stacks]
-    covariance = covariance_matrix(ratios)
+    covariance = [covariance_matrix([outputs[column] for outputs in stacks]) for column in range(len(OUTPUTS))]
     shares = []
     for ratio in ratios:
         parts = ratio.error_components()
@@ -90,7 +90,7 @@ def main():
         "outputs": OUTPUTS,
         "values": values,
         "u": u,
-        "covariance": [[float(c) for c in row] for row in covariance],
+        "covariance": [[[float(c) for c in row] for row in matrix] for matrix in covariance],
         "shares": [[0.0 if s is None else share.get(s, 0.0) for s in sources] for share in shares],
     }))
 
