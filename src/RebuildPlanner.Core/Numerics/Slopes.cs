@@ -6,9 +6,8 @@ namespace RebuildPlanner.Core.Numerics;
 
 /// <summary>A figure and its derivatives with respect to <see cref="Count"/> inputs at once: what <see cref="Dual{T}"/> is for one.</summary>
 /// <remarks>
-/// A pass costs hardly more for eight derivatives than for one, since the roots, sines and logarithms of the figure itself are taken once.
-/// Measured on eight cylinders against a <see cref="Dual{T}"/> pass an input: see docs/benchmarks.md. Each derivative is formed by the same
-/// operations in the same order as there.
+/// The roots, sines and logarithms of the figure itself are taken once for eight derivatives. Each derivative is formed by the same
+/// operations in the same order as in a dual number. What it won, and what did not: docs/benchmarks.md.
 /// </remarks>
 public readonly record struct Slopes : IScalar<Slopes>
 {
