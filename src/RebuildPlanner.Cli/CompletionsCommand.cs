@@ -5,10 +5,14 @@ namespace RebuildPlanner.Cli;
 /// <summary><c>completions</c>: a script that lets the shell finish words of this program.</summary>
 public static class CompletionsCommand
 {
+    // Each word is quoted for the shell, since a stage has a blank in it.
     private const string Bash = """
         _rebuild() {
-            local IFS=$'\n'
-            COMPREPLY=($(rebuild "[suggest:$COMP_POINT]" "$COMP_LINE" 2>/dev/null))
+            local word
+            COMPREPLY=()
+            while IFS= read -r word; do
+                [ -n "$word" ] && COMPREPLY+=("$(printf '%q' "$word")")
+            done < <(rebuild "[suggest:$COMP_POINT]" "$COMP_LINE" 2>/dev/null)
         }
         complete -o default -F _rebuild rebuild
         """;

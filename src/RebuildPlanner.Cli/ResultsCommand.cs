@@ -30,6 +30,7 @@ public static class ResultsCommand
             HelpName = "stage",
             CustomParser = ParseStage,
         };
+        stage.CompletionSources.Clear(); // the names of the enumeration are not words of the trade
         stage.CompletionSources.Add(_ => StageWords.All.Select(word => new System.CommandLine.Completions.CompletionItem(word)));
         Option<bool> json = new("--json") { Description = "As JSON: units cm3, mm, kPa and 1, full precision." };
         Option<bool> inch = new("--inch") { Description = "Print in inch, cubic inch and psi." };

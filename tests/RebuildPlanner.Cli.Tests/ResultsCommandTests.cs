@@ -143,8 +143,9 @@ public class ResultsCommandTests
         Assert.Contains(line, Screen.Of("completions", shell).Output, StringComparison.Ordinal);
 
     [Fact]
-    public void The_shell_is_offered_the_stages() =>
-        Assert.Contains("as machined", Screen.Of("[suggest:24]", "rebuild results --stage ").Output, StringComparison.Ordinal);
+    public void The_shell_is_offered_the_stages_in_words_of_the_trade() => Assert.Equal(
+        ["as machined", "as received", "before", "planned"],
+        Screen.Of("[suggest:24]", "rebuild results --stage ").Output.Split('\n', StringSplitOptions.RemoveEmptyEntries).Where(word => !word.StartsWith('-')).Order());
 
     // The library names the running program, which here is the test.
     private static string TrimEnds(string text) => string.Join('\n', text.Split('\n').Select(line => line.TrimEnd())).TrimEnd().Replace("RebuildPlanner.Cli.Tests", "rebuild", StringComparison.Ordinal) + "\n";
