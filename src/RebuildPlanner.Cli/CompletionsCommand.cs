@@ -19,10 +19,10 @@ public static class CompletionsCommand
 
     private const string Zsh = """
         _rebuild() {
-            local -a words
-            words=("${(@f)$(rebuild "[suggest:$CURSOR]" "$BUFFER" 2>/dev/null)}")
-            compadd -- $words
-            _files
+            local -a found
+            found=("${(@f)$(rebuild "[suggest:$CURSOR]" "$BUFFER" 2>/dev/null)}")
+            found=(${found:#})
+            (( $#found )) && compadd -- "${found[@]}" || _files
         }
         compdef _rebuild rebuild
         """;
