@@ -21,7 +21,15 @@ public enum FigureKind
 /// <summary>The estimate of one place of a figure.</summary>
 /// <param name="Place">The place.</param>
 /// <param name="Estimate">Its estimate.</param>
-public sealed record PlacedEstimate(Place Place, Estimate Estimate);
+public sealed record PlacedEstimate(Place Place, Estimate Estimate)
+{
+    /// <summary>The figure the places make: their mean with equal weight, but the pockets of several valves add up.</summary>
+    public static Estimate Together(What what, IReadOnlyList<PlacedEstimate> places)
+    {
+        double weight = what == What.Pocket ? 1.0 : 1.0 / places.Count;
+        return places.Count == 1 ? places[0].Estimate : Estimate.Combine([.. places.Select(place => (weight, place.Estimate))]);
+    }
+}
 
 /// <summary>The figure that counts for one thing on one cylinder at a stage.</summary>
 /// <param name="What">The thing.</param>

@@ -74,8 +74,8 @@ public sealed class MeasuredFigures
             return null;
         }
 
-        int narrowest = relevant.Max(reading => Narrowness(reading.Reading.Place));
-        CorrectedReading[] counting = [.. relevant.Where(reading => Narrowness(reading.Reading.Place) == narrowest)];
+        int narrowest = relevant.Max(reading => reading.Reading.Place.Narrowness);
+        CorrectedReading[] counting = [.. relevant.Where(reading => reading.Reading.Place.Narrowness == narrowest)];
         Place first = counting[0].Reading.Place;
         Place owner = new(first.Cylinder, first.Piece, first.Head, first.Bank);
         if (!_figures.TryGetValue((what, stage, owner), out Figure? figure))
@@ -87,7 +87,7 @@ public sealed class MeasuredFigures
             ];
             string? gauges = string.Join(", ", counting.Select(reading => reading.Reading.Gauge).OfType<string>().Distinct());
             figure = new Figure(
-                what, Mean(what, places), FigureKind.Measured, counting[0].Reading.Stage, null, gauges.Length == 0 ? null : gauges, places)
+                what, PlacedEstimate.Together(what, places), FigureKind.Measured, counting[0].Reading.Stage, null, gauges.Length == 0 ? null : gauges, places)
             {
                 IsArea = counting[0].Reading.Value?.Kind == Quantities.QuantityKind.Area,
             };
@@ -109,16 +109,6 @@ public sealed class MeasuredFigures
             && _parts.Piston(cylinder, at) is { } fitted
             && fitted.Piece == piece
             && (reading.Stage is { } read && read > fitted.Since ? read : fitted.Since) == at;
-    }
-
-    private static int Narrowness(Place place) =>
-        place.Cylinder is not null || place.Piece is not null ? 2 : place.Head is not null || place.Bank is not null ? 1 : 0;
-
-    /// <summary>Places are averaged with equal weight, but the pockets of several valves add up.</summary>
-    private static Estimate Mean(What what, PlacedEstimate[] places)
-    {
-        double weight = what == What.Pocket ? 1.0 : 1.0 / places.Length;
-        return places.Length == 1 ? places[0].Estimate : Estimate.Combine([.. places.Select(place => (weight, place.Estimate))]);
     }
 
     private Figure? CrownByFill(int cylinder, Stage? stage, Func<Figure?> crownFillBore)

@@ -53,29 +53,24 @@ public sealed class StatedFigures(Job job, EngineParts parts, SourceBook book)
                 : null;
         }
 
-        int narrowest = relevant.Max(candidate => Narrowness(candidate.Entry.Place));
+        int narrowest = relevant.Max(candidate => candidate.Entry.Place.Narrowness);
         PlacedEstimate[] places =
         [
             .. relevant
-                .Where(candidate => Narrowness(candidate.Entry.Place) == narrowest)
+                .Where(candidate => candidate.Entry.Place.Narrowness == narrowest)
                 .GroupBy(candidate => candidate.Entry.Place)
                 .Select(place => place.Last())
                 .Select(candidate => new PlacedEstimate(
                     candidate.Entry.Place,
                     EstimateOf(candidate.Entry.Value, what, (kind, candidate.Index, Owner(what, candidate.Entry, cylinder)), book))),
         ];
-        StatedFigure last = relevant.Last(candidate => Narrowness(candidate.Entry.Place) == narrowest).Entry;
-        double weight = what == What.Pocket ? 1.0 : 1.0 / places.Length;
-        Estimate mean = places.Length == 1 ? places[0].Estimate : Estimate.Combine([.. places.Select(place => (weight, place.Estimate))]);
-        return new Figure(what, mean, kind, stage, last.From, null, places) { IsArea = last.Value.Kind == QuantityKind.Area };
+        StatedFigure last = relevant.Last(candidate => candidate.Entry.Place.Narrowness == narrowest).Entry;
+        return new Figure(what, PlacedEstimate.Together(what, places), kind, stage, last.From, null, places) { IsArea = last.Value.Kind == QuantityKind.Area };
     }
 
     private bool Covers(Place place, int cylinder, Stage? stage) =>
         parts.Covers(place, cylinder)
         && (place.Piece is null || parts.Piston(cylinder, stage ?? parts.Stages[^1])?.Piece == place.Piece);
-
-    private static int Narrowness(Place place) =>
-        place.Cylinder is not null || place.Piece is not null ? 2 : place.Head is not null || place.Bank is not null ? 1 : 0;
 
     private string Owner(What what, StatedFigure entry, int cylinder)
     {

@@ -52,6 +52,9 @@ public sealed record Place(
     string? Cylinder = null, string? Piece = null, string? Head = null, string? Bank = null,
     At? At = null, BoreAxis? Axis = null, Valve? Valve = null, double? ClockHours = null)
 {
+    /// <summary>How closely the part is named: 2 one cylinder or piece, 1 one head or bank, 0 all. The narrowest entry counts.</summary>
+    public int Narrowness => Cylinder is not null || Piece is not null ? 2 : Head is not null || Bank is not null ? 1 : 0;
+
     /// <summary>No part named: all of them.</summary>
     public static Place Everywhere { get; } = new();
 }
