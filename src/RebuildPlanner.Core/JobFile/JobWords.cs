@@ -26,7 +26,8 @@ public static class JobWords
         ("single", Layout.Single), ("inline", Layout.Inline), ("vee", Layout.Vee), ("flat", Layout.Flat));
 
     /// <summary><c>metal</c>, <c>blockMetal</c> and <c>rodMetal</c>.</summary>
-    public static WordList<Metal> Metals { get; } = new(("cast iron", Metal.CastIron), ("steel", Metal.Steel), ("aluminium", Metal.Aluminium));
+    public static WordList<Metal> Metals { get; } = new(
+        ("cast iron", Metal.CastIron), ("grey iron", Metal.GreyIron), ("steel", Metal.Steel), ("aluminium", Metal.Aluminium));
 
     /// <summary>The cam's <c>place</c>: true for overhead.</summary>
     public static WordList<bool> CamPlaces { get; } = new(("overhead", true), ("block", false));

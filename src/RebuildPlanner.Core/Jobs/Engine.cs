@@ -42,8 +42,11 @@ public enum Layout
 /// <summary>A metal whose expansion is known.</summary>
 public enum Metal
 {
-    /// <summary>Grey iron, 11.4e-6 /K.</summary>
+    /// <summary>Cast iron, of which engines have the grey kind: 11.4e-6 /K.</summary>
     CastIron,
+
+    /// <summary>The same by its exact name, kept as it was written.</summary>
+    GreyIron,
 
     /// <summary>Steel, 11.7e-6 /K.</summary>
     Steel,

@@ -58,6 +58,7 @@ public sealed record CorrectedReading(Reading Reading, double Value, double Fact
 
         return new CorrectedReading(reading, value, factor, terms);
 
-        int Alpha(Metal metal) => book.Shared(("expansion", metal), Source.Rectangular(Expansion.RelativeLimit * Expansion.PerC(metal)));
+        // One input a metal: iron by either of its names is one.
+        int Alpha(Metal metal) => book.Shared(("expansion", Expansion.PerC(metal)), Source.Rectangular(Expansion.RelativeLimit * Expansion.PerC(metal)));
     }
 }

@@ -18,7 +18,7 @@ public static class Expansion
     /// <remarks>Source: materials-tables. Valid for: 0 to 50 °C. Error: ±10 %, see <see cref="RelativeLimit"/>.</remarks>
     public static double PerC(Metal metal) => metal switch
     {
-        Metal.CastIron => 11.4e-6,
+        Metal.CastIron or Metal.GreyIron => 11.4e-6,
         Metal.Steel => 11.7e-6,
         _ => 21.5e-6,
     };
