@@ -33,6 +33,23 @@ public sealed class EngineParts
     /// <summary>The stages whose figures may count, earliest first, the asked one last.</summary>
     public IReadOnlyList<Stage> Stages { get; }
 
+    /// <summary>The stage before one of these, or null for the first.</summary>
+    public Stage? Before(Stage stage)
+    {
+        Stage? before = null;
+        foreach (Stage earlier in Stages)
+        {
+            if (earlier == stage)
+            {
+                break;
+            }
+
+            before = earlier;
+        }
+
+        return before;
+    }
+
     /// <summary>The cylinder's label.</summary>
     public string Label(int cylinder) => _job.Engine.Labels[cylinder];
 

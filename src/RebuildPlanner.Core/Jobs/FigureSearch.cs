@@ -56,14 +56,13 @@ public sealed class FigureSearch
             return measured;
         }
 
-        int index = Parts.Stages.ToList().IndexOf(at);
-        Stage? before = index > 0 ? Parts.Stages[index - 1] : null;
+        Stage? before = Parts.Before(at);
         Figure? earlier = before is { } previous ? Find(what, cylinder, previous) : Throughout(what, cylinder);
 
         // Cuts of earlier rebuilds lie behind every figure of this job: they end none.
         bool ended = before is not null
-            && (earlier is null ? what == What.Bore && BoredAt(cylinder, at) : _successors.Ends(earlier, cylinder, at));
-        Figure? computed = ended ? _successors.Carry(what, earlier, cylinder, at, before) : null;
+            && (earlier is null ? what == What.Bore && _successors.IsBored(cylinder, at) : _successors.Ends(earlier, cylinder, at));
+        Figure? computed = ended ? _successors.Carry(what, earlier, cylinder, at) : null;
         Figure? figure = computed ?? _stated.Given(what, cylinder, at) ?? _stated.Assumed(what, cylinder, at);
         if (figure is null && ended)
         {
@@ -73,9 +72,6 @@ public sealed class FigureSearch
 
         return figure ?? earlier;
     }
-
-    private bool BoredAt(int cylinder, Stage at) =>
-        _successors.Ends(new Figure(What.Bore, Estimate.Zero, FigureKind.Assumed, null, null, null, []), cylinder, at);
 
     private Figure? Throughout(What what, int cylinder) =>
         _measured.At(what, cylinder, null, () => Find(What.Bore, cylinder)) ?? _stated.Throughout(what, cylinder);

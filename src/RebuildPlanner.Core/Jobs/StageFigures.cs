@@ -29,11 +29,13 @@ public sealed class StageFigures
         get
         {
             LinearFigure?[] swept = [.. Cylinders.Select(cylinder => Of(Output.SweptVolume, cylinder))];
-            return Array.Exists(swept, figure => figure is null)
-                ? null
-                : new LinearFigure(
-                    swept.Sum(figure => figure!.Value), Row(swept.SelectMany(figure => figure!.Terms)), _worst.Sum(Output.SweptVolume),
-                    [.. swept.SelectMany(figure => figure!.Terms)]);
+            if (Array.Exists(swept, figure => figure is null))
+            {
+                return null;
+            }
+
+            Term[] terms = [.. swept.SelectMany(figure => figure!.Terms)];
+            return new LinearFigure(swept.Sum(figure => figure!.Value), Row(terms), _worst.Sum(Output.SweptVolume), terms);
         }
     }
 
@@ -146,14 +148,10 @@ public sealed class StageFigures
         return Linear((1.0, largest.Estimate), (-1.0, smallest.Estimate));
     }
 
-    private double[] Row(IEnumerable<Term> terms)
+    private double[] Row(IReadOnlyList<Term> terms)
     {
         double[] row = new double[_model.Model.Sources.Length];
-        foreach (Term term in terms)
-        {
-            row[term.Source] += term.Coefficient;
-        }
-
+        Propagation.AddTo(row, terms, 1.0);
         return row;
     }
 }

@@ -12,6 +12,9 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
 
     private readonly CutAmounts _amounts = new(job, parts, book);
 
+    /// <summary>Whether a cylinder was bored, honed or sleeved at a stage, which gives it a size even where none was known before.</summary>
+    public bool IsBored(int cylinder, Stage stage) => _boreCuts.Any(kind => parts.Cuts(kind, cylinder, stage).Any());
+
     /// <summary>Whether what was done at a stage ends an earlier figure.</summary>
     /// <param name="earlier">The figure, of an earlier stage or holding throughout.</param>
     /// <param name="cylinder">The cylinder's index.</param>
@@ -36,7 +39,7 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
 
         // Asked only where the figure depends on the answer: a crank rise is itself a figure, and must not ask for itself.
         bool Made(CutKind kind) => parts.Cuts(kind, cylinder, stage).Any();
-        bool Bored() => _boreCuts.Any(Made);
+        bool Bored() => IsBored(cylinder, stage);
         bool HeadWorked() => Made(CutKind.HeadSkim) || Made(CutKind.ValveSeat);
         bool Decked() => Made(CutKind.DeckCut) || Rise(cylinder, stage) is not null;
 
@@ -52,12 +55,11 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
     /// <param name="earlier">Its figure before, or null; a bore needs none.</param>
     /// <param name="cylinder">The cylinder's index.</param>
     /// <param name="stage">The stage.</param>
-    /// <param name="before">The stage before, or null where there is none.</param>
-    public Figure? Carry(What what, Figure? earlier, int cylinder, Stage stage, Stage? before) => (what, earlier) switch
+    public Figure? Carry(What what, Figure? earlier, int cylinder, Stage stage) => (what, earlier) switch
     {
         (What.Bore, _) => FinishedBore(cylinder, stage),
         (What.Chamber, not null) => Chamber(earlier, cylinder, stage),
-        (What.Deck, not null) => Deck(earlier, cylinder, stage, before),
+        (What.Deck, not null) => Deck(earlier, cylinder, stage),
         (What.HeadHeight, not null) => Less(earlier, stage, [.. _amounts.Of(CutKind.HeadSkim, cylinder, stage)]),
         (What.DeckHeight or What.BarrelHeight, not null) => Less(earlier, stage, [.. _amounts.Of(CutKind.DeckCut, cylinder, stage)]),
         (What.BlockHeight, not null) => Less(
@@ -164,8 +166,9 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
         return valve == Valve.Inlet ? (all + 1) / 2 : all / 2;
     }
 
-    private Figure? Deck(Figure earlier, int cylinder, Stage stage, Stage? before)
+    private Figure? Deck(Figure earlier, int cylinder, Stage stage)
     {
+        Stage? before = parts.Before(stage);
         List<(double, Estimate)> change = [];
         List<Figure> restsOn = [earlier];
         if (earlier.Stage is not null && PistonChanged(cylinder, stage))
@@ -248,15 +251,14 @@ public sealed class Successors(Job job, EngineParts parts, SourceBook book, Func
     /// <summary>Rod, crank or base gasket that became another at a stage: stated anew there, or measured at two stages.</summary>
     private IEnumerable<What> Changed(int cylinder, Stage stage)
     {
-        int index = parts.Stages.ToList().IndexOf(stage);
-        if (index == 0)
+        if (parts.Before(stage) is not { } before)
         {
             yield break;
         }
 
         foreach (What what in new[] { What.Stroke, What.RodLength, What.BaseGasket })
         {
-            Figure? now = find(what, cylinder, stage), then = find(what, cylinder, parts.Stages[index - 1]);
+            Figure? now = find(what, cylinder, stage), then = find(what, cylinder, before);
             if (now?.Stage == stage && then is not null && (now.Kind != FigureKind.Measured || then.Stage is not null))
             {
                 yield return what;

@@ -30,8 +30,4 @@ public sealed record Estimate(double Value, IReadOnlyList<Term> Terms)
 
         return new(value, terms);
     }
-
-    /// <summary>The same doubts about another value, as when a function with slope <paramref name="slope"/> is applied.</summary>
-    public Estimate Through(double value, double slope) =>
-        new(value, [.. Terms.Select(term => term with { Coefficient = slope * term.Coefficient })]);
 }

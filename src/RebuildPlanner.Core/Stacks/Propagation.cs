@@ -62,12 +62,17 @@ public static class Propagation
     /// <param name="estimate">The estimate whose terms are added.</param>
     /// <param name="factor">The figure's sensitivity to the estimate.</param>
     /// <remarks>row_s += factor·c_s, the chain rule. Source: jcgm100 (5.1.3). Valid for: every row. Error: rounding.</remarks>
-    public static void AddTo(Span<double> row, Estimate estimate, double factor)
+    public static void AddTo(Span<double> row, Estimate estimate, double factor) => AddTo(row, estimate.Terms, factor);
+
+    /// <inheritdoc cref="AddTo(Span{double}, Estimate, double)"/>
+    /// <param name="row">The row that is added to.</param>
+    /// <param name="terms">The terms that are added.</param>
+    /// <param name="factor">The figure's sensitivity to what they are terms of.</param>
+    public static void AddTo(Span<double> row, IReadOnlyList<Term> terms, double factor)
     {
-        for (int i = 0; i < estimate.Terms.Count; i++)
+        for (int i = 0; i < terms.Count; i++)
         {
-            Term term = estimate.Terms[i];
-            row[term.Source] += factor * term.Coefficient;
+            row[terms[i].Source] += factor * terms[i].Coefficient;
         }
     }
 
