@@ -1,5 +1,4 @@
 using System.CommandLine;
-using System.CommandLine.Parsing;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Quantities;
 
@@ -23,15 +22,8 @@ public static class ResultsCommand
     /// <summary>Makes the command.</summary>
     public static Command Make(Terminal terminal)
     {
-        Option<string> file = new("--file") { Description = "The job file.", HelpName = "job.json", Required = true };
-        Option<Stage?> stage = new("--stage")
-        {
-            Description = "before, \"as received\", planned or \"as machined\"; else the last stage with entries.",
-            HelpName = "stage",
-            CustomParser = ParseStage,
-        };
-        stage.CompletionSources.Clear(); // the names of the enumeration are not words of the trade
-        stage.CompletionSources.Add(_ => StageWords.All.Select(word => new System.CommandLine.Completions.CompletionItem(word)));
+        Option<string> file = JobOptions.File();
+        Option<Stage?> stage = JobOptions.Stage();
         Option<bool> json = new("--json") { Description = "As JSON: units cm3, mm, kPa and 1, full precision." };
         Option<bool> inch = new("--inch") { Description = "Print in inch, cubic inch and psi." };
         ExampleCommand command = new("results", Description, Example) { file, stage, json, inch };
@@ -48,16 +40,9 @@ public static class ResultsCommand
             return ExitCode.Wrong;
         }
 
-        Stage stage = asked ?? LastStage.Of(job);
-        Results results = StageResults.Of(job, stage);
-        if (results.IsEmpty)
+        Results results = StageResults.Of(job, asked ?? LastStage.Of(job));
+        if (JobOptions.IsEmpty(path, results, terminal))
         {
-            terminal.Error.WriteLine($"{path}: no cylinder can be computed at the stage {StageWords.Of(stage)}. Missing:");
-            foreach (string missing in ResultsScreen.MissingLines(results))
-            {
-                terminal.Error.WriteLine($"  {missing}");
-            }
-
             return ExitCode.Wrong;
         }
 
@@ -70,21 +55,6 @@ public static class ResultsCommand
             ResultsScreen.Show(job, results, system, terminal);
         }
 
-        return results.Verdicts.Any(verdict => verdict.State == VerdictState.Outside) ? ExitCode.Outside : ExitCode.Done;
-    }
-
-    private static Stage? ParseStage(ArgumentResult argument)
-    {
-        string typed = string.Join(' ', argument.Tokens.Select(token => token.Value));
-        if (StageWords.Find(typed) is { } stage)
-        {
-            return stage;
-        }
-
-        string? near = NearestWord.Of(typed, StageWords.All);
-        argument.AddError(
-            $"--stage {typed}: there is no such stage{(near is null ? "" : $"; did you mean \"{near}\"?")} The stages are "
-            + string.Join(", ", StageWords.All.Select(word => $"\"{word}\"")) + ".");
-        return null;
+        return JobOptions.ExitCodeOf(results);
     }
 }

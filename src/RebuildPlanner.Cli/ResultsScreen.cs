@@ -7,27 +7,21 @@ namespace RebuildPlanner.Cli;
 /// <summary>Lays results out for a screen or a pipe, 80 columns and up; it adds nothing to them.</summary>
 internal static class ResultsScreen
 {
-    private const string Dash = "–";
-
     /// <summary>Shows the results.</summary>
     public static void Show(Job job, Results results, UnitSystem system, Terminal terminal)
     {
         IAnsiConsole console = terminal.Draw();
+        ResultsText text = new(results, system);
         Heading(console, job, results);
-        Ratios(console, results, system);
-        Bores(console, results, system);
-        VolumesOf(console, results, system);
-        Spreads(console, results, system);
+        Ratios(console, results, text);
+        Bores(console, results, text);
+        VolumesOf(console, results, text);
+        Spreads(console, results, text);
         VerdictsOf(console, results);
-        Missing(console, results);
-        Origins(console, results);
-        CautionsOf(console, results);
+        Missing(console, text);
+        Origins(console, results, text);
+        CautionsOf(console, text);
     }
-
-    /// <summary>What is missing, a line a figure.</summary>
-    public static IEnumerable<string> MissingLines(Results results) =>
-        results.Missing.GroupBy(missing => missing.What)
-            .Select(same => $"{same.Key}: {CylindersOf(same.Select(missing => missing.Cylinder), results)}");
 
     private static void Heading(IAnsiConsole console, Job job, Results results)
     {
@@ -40,59 +34,62 @@ internal static class ResultsScreen
         Line(console, "worst: between these even with every error at its limit at once.");
     }
 
-    private static void Ratios(IAnsiConsole console, Results results, UnitSystem system)
+    private static void Ratios(IAnsiConsole console, Results results, ResultsText text)
     {
-        Table table = NewTable("cyl", "ratio", "95 % from", "to", "worst from", "to", "trapped", $"cranking {QuantityPrint.Unit(QuantityKind.Pressure, system)}");
+        Table table = NewTable("cyl", "ratio", "95 % from", "to", "worst from", "to", "trapped", $"cranking {text.Unit(QuantityKind.Pressure)}");
         foreach (CylinderResult cylinder in results.Cylinders)
         {
             Row(
-                table, cylinder.Cylinder, Value(cylinder.CompressionRatio, system), End(cylinder.CompressionRatio, q => q.Low, system),
-                End(cylinder.CompressionRatio, q => q.High, system), End(cylinder.CompressionRatio, q => q.WorstLow, system),
-                End(cylinder.CompressionRatio, q => q.WorstHigh, system), Value(cylinder.TrappedRatio, system), Value(cylinder.CrankingPressure, system));
+                table, cylinder.Cylinder, text.Value(cylinder.CompressionRatio), text.End(cylinder.CompressionRatio, q => q.Low),
+                text.End(cylinder.CompressionRatio, q => q.High), text.End(cylinder.CompressionRatio, q => q.WorstLow),
+                text.End(cylinder.CompressionRatio, q => q.WorstHigh), text.Value(cylinder.TrappedRatio), text.Value(cylinder.CrankingPressure));
         }
 
         Write(console, "Compression ratio", table, results.Cylinders.Any(cylinder => cylinder.CompressionRatio is not null));
     }
 
-    private static void Bores(IAnsiConsole console, Results results, UnitSystem system)
+    private static void Bores(IAnsiConsole console, Results results, ResultsText text)
     {
-        string unit = QuantityPrint.Unit(QuantityKind.Length, system);
+        string unit = text.Unit(QuantityKind.Length);
         Table gaps = NewTable("cyl", "to head", "95 % from", "to", "worst from", "to");
         Table bores = NewTable("cyl", "bore", "95 % from", "to", "taper", "out-of-round");
         foreach (CylinderResult cylinder in results.Cylinders)
         {
             Row(
-                gaps, cylinder.Cylinder, Value(cylinder.PistonToHead, system), End(cylinder.PistonToHead, q => q.Low, system),
-                End(cylinder.PistonToHead, q => q.High, system), End(cylinder.PistonToHead, q => q.WorstLow, system),
-                End(cylinder.PistonToHead, q => q.WorstHigh, system));
+                gaps, cylinder.Cylinder, text.Value(cylinder.PistonToHead), text.End(cylinder.PistonToHead, q => q.Low),
+                text.End(cylinder.PistonToHead, q => q.High), text.End(cylinder.PistonToHead, q => q.WorstLow),
+                text.End(cylinder.PistonToHead, q => q.WorstHigh));
             Row(
-                bores, cylinder.Cylinder, Value(cylinder.Bore, system), End(cylinder.Bore, q => q.Low, system),
-                End(cylinder.Bore, q => q.High, system), Value(cylinder.Taper, system), Value(cylinder.OutOfRound, system));
+                bores, cylinder.Cylinder, text.Value(cylinder.Bore), text.End(cylinder.Bore, q => q.Low),
+                text.End(cylinder.Bore, q => q.High), text.Value(cylinder.Taper), text.Value(cylinder.OutOfRound));
         }
 
         Write(console, $"Piston to head, {unit}", gaps, results.Cylinders.Any(cylinder => cylinder.PistonToHead is not null));
         Write(console, $"Bores, {unit}", bores, results.Cylinders.Any(cylinder => cylinder.Bore is not null));
     }
 
-    private static void VolumesOf(IAnsiConsole console, Results results, UnitSystem system)
+    private static void VolumesOf(IAnsiConsole console, Results results, ResultsText text)
     {
-        string unit = QuantityPrint.Unit(QuantityKind.Volume, system);
+        string unit = text.Unit(QuantityKind.Volume);
         Table table = NewTable("cyl", "chamber", "gasket", "deck", "crown", "top land", "clearance", "swept");
         foreach (CylinderResult cylinder in results.Cylinders)
         {
             Row(
-                table, cylinder.Cylinder, Value(cylinder.Chamber, system), Value(cylinder.Gasket, system), Value(cylinder.Deck, system),
-                Value(cylinder.Crown, system), Value(cylinder.TopLand, system), Value(cylinder.ClearanceVolume, system), Value(cylinder.SweptVolume, system));
+                table, cylinder.Cylinder, text.Value(cylinder.Chamber), text.Value(cylinder.Gasket), text.Value(cylinder.Deck),
+                text.Value(cylinder.Crown), text.Value(cylinder.TopLand), text.Value(cylinder.ClearanceVolume), text.Value(cylinder.SweptVolume));
         }
 
         Write(console, $"Volumes, {unit}", table, results.Cylinders.Any(cylinder => (cylinder.Chamber ?? cylinder.SweptVolume ?? cylinder.Crown) is not null));
         foreach (CylinderResult cylinder in results.Cylinders.Where(cylinder => cylinder.CrossCheck is not null))
         {
-            Line(console, Escape($"Cylinder {cylinder.Cylinder}: whole chamber less the sum of its parts {WithDoubt(cylinder.CrossCheck!, system)} {unit}."));
+            ResultQuantity check = cylinder.CrossCheck!;
+            Line(console, Escape(
+                $"Cylinder {cylinder.Cylinder}: whole chamber less the sum of its parts {text.Value(check)} "
+                + $"(95 % from {text.End(check, q => q.Low)} to {text.End(check, q => q.High)}) {unit}."));
         }
     }
 
-    private static void Spreads(IAnsiConsole console, Results results, UnitSystem system)
+    private static void Spreads(IAnsiConsole console, Results results, ResultsText text)
     {
         Table table = NewTable("", "value", "95 % from", "to", "worst from", "to");
         Add("displacement", results.Displacement);
@@ -109,10 +106,10 @@ internal static class ResultsScreen
         {
             if (quantity is not null)
             {
-                string unit = QuantityPrint.Unit(quantity.Kind, system);
+                string unit = text.Unit(quantity.Kind);
                 Row(
-                    table, unit.Length == 0 ? name : $"{name}, {unit}", Value(quantity, system), End(quantity, q => q.Low, system),
-                    End(quantity, q => q.High, system), End(quantity, q => q.WorstLow, system), End(quantity, q => q.WorstHigh, system));
+                    table, unit.Length == 0 ? name : $"{name}, {unit}", text.Value(quantity), text.End(quantity, q => q.Low),
+                    text.End(quantity, q => q.High), text.End(quantity, q => q.WorstLow), text.End(quantity, q => q.WorstHigh));
             }
         }
     }
@@ -134,33 +131,34 @@ internal static class ResultsScreen
             {
                 Row(
                     table, verdict.Cylinder ?? "all", ResultsJson.WordOf(verdict.State),
-                    verdict.Probability is { } probability ? Belief(probability) : Dash, verdict.Settle ?? "");
+                    ResultsText.Belief(verdict.Probability), verdict.Settle ?? "");
             }
 
-            Write(console, $"Limit: {what} {bounds} (belief wanted {Belief(level)})", table, known: true);
+            Write(console, $"Limit: {what} {bounds} (belief wanted {ResultsText.Level(level)})", table, known: true);
         }
     }
 
-    private static void Missing(IAnsiConsole console, Results results)
+    private static void Missing(IAnsiConsole console, ResultsText text)
     {
-        if (results.Missing.Count > 0)
+        string[] lines = [.. text.Missing()];
+        if (lines.Length > 0)
         {
             Section(console, "Missing");
-            foreach (string line in MissingLines(results))
+            foreach (string line in lines)
             {
                 Bullet(console, line);
             }
         }
     }
 
-    private static void Origins(IAnsiConsole console, Results results)
+    private static void Origins(IAnsiConsole console, Results results, ResultsText text)
     {
         Section(console, "Where the figures come from");
         foreach (IGrouping<FigureKind, ProvenanceLine> kind in results.Provenance.GroupBy(line => line.Kind).OrderBy(kind => kind.Key))
         {
             IEnumerable<string> items = kind
                 .GroupBy(line => (line.What, line.Stage, line.From, line.Gauge))
-                .Select(same => Origin(same.Key.What, same.Key.Stage, same.Key.From, same.Key.Gauge, CylindersOf(same.Select(line => line.Cylinder), results), results.Stage));
+                .Select(same => Origin(same.Key.What, same.Key.Stage, same.Key.From, same.Key.Gauge, text.Cylinders(same.Select(line => line.Cylinder)), results.Stage));
             Bullet(console, $"{ResultsJson.WordOf(kind.Key)}: {string.Join("; ", items)}");
         }
     }
@@ -169,44 +167,20 @@ internal static class ResultsScreen
     {
         string[] details =
         [
-            .. new[] { from, gauge, stage is { } other && other != asked ? StageWords.Of(other) : null, cylinders == "all" ? null : $"cyl {cylinders}" }
+            .. new[] { from, gauge, stage is { } other && other != asked ? StageWords.Of(other) : null, cylinders == ResultsText.All ? null : $"cyl {cylinders}" }
                 .OfType<string>(),
         ];
         return details.Length == 0 ? what : $"{what} ({string.Join(", ", details)})";
     }
 
-    private static void CautionsOf(IAnsiConsole console, Results results)
+    private static void CautionsOf(IAnsiConsole console, ResultsText text)
     {
         Section(console, "Cautions");
-        foreach (IGrouping<string, Caution> same in results.Cautions.GroupBy(caution => caution.Text))
+        foreach (string caution in text.Cautions())
         {
-            string cylinders = CylindersOf(same.Select(caution => caution.Cylinder).OfType<string>(), results);
-            Bullet(console, cylinders.Length == 0 || cylinders == "all" ? same.Key : $"Cylinder {cylinders}: {same.Key}");
+            Bullet(console, caution);
         }
     }
-
-    private static string CylindersOf(IEnumerable<string> labels, Results results)
-    {
-        string[] distinct = [.. labels.Distinct()];
-        return distinct.Length == results.Cylinders.Count ? "all" : string.Join(", ", distinct);
-    }
-
-    private static string Value(ResultQuantity? quantity, UnitSystem system) =>
-        quantity is null ? Dash : QuantityPrint.Number(quantity.Value, quantity.Kind, quantity.StandardUncertainty, system);
-
-    private static string WithDoubt(ResultQuantity quantity, UnitSystem system) =>
-        $"{Value(quantity, system)} (95 % from {End(quantity, q => q.Low, system)} to {End(quantity, q => q.High, system)})";
-
-    private static string End(ResultQuantity? quantity, Func<ResultQuantity, double?> end, UnitSystem system) =>
-        quantity is not null && end(quantity) is { } value ? QuantityPrint.Number(value, quantity.Kind, quantity.StandardUncertainty, system) : Dash;
-
-    // A belief is never printed as certain: what rounds to 100 % is "over 99.9 %".
-    private static string Belief(double probability) => probability switch
-    {
-        > 0.9995 => "> 99.9 %",
-        < 0.0005 => "< 0.1 %",
-        _ => string.Create(System.Globalization.CultureInfo.InvariantCulture, $"{100.0 * probability:F1} %"),
-    };
 
     private static Table NewTable(params string[] columns)
     {

@@ -36,6 +36,7 @@ public static class Shell
         RootCommand root = new("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.")
         {
             ResultsCommand.Make(terminal),
+            SheetCommand.Make(terminal),
             CompletionsCommand.Make(terminal),
         };
         ExampleHelp.AddTo(root);

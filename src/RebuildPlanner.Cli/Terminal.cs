@@ -8,8 +8,13 @@ namespace RebuildPlanner.Cli;
 /// <param name="Error">Standard error.</param>
 /// <param name="WidthColumns">How wide the output is, columns.</param>
 /// <param name="IsScreen">True on a real terminal, where weight and colour mean something.</param>
-public sealed record Terminal(TextWriter Output, TextWriter Error, int WidthColumns, bool IsScreen)
+/// <param name="Today">The day it is.</param>
+/// <param name="DataFolder">Where the user's own templates and jobs are kept, or null for nowhere.</param>
+public sealed record Terminal(TextWriter Output, TextWriter Error, int WidthColumns, bool IsScreen, DateOnly Today, string? DataFolder)
 {
+    // Set, it moves the data folder; else it is where the system keeps what programs keep for a user.
+    private const string DataFolderVariable = "REBUILD_PLANNER_DATA", DataFolderName = "rebuild-planner";
+
     /// <summary>What a pipe and a narrow mind agree on.</summary>
     public const int UsualWidthColumns = 80;
 
@@ -18,7 +23,20 @@ public sealed record Terminal(TextWriter Output, TextWriter Error, int WidthColu
     {
         Console.OutputEncoding = new UTF8Encoding(encoderShouldEmitUTF8Identifier: false);
         bool screen = !Console.IsOutputRedirected;
-        return new Terminal(Console.Out, Console.Error, screen ? Math.Max(40, Console.WindowWidth) : UsualWidthColumns, screen);
+        return new Terminal(
+            Console.Out, Console.Error, screen ? Math.Max(40, Console.WindowWidth) : UsualWidthColumns, screen,
+            DateOnly.FromDateTime(DateTime.Now), OwnDataFolder());
+    }
+
+    private static string? OwnDataFolder()
+    {
+        if (Environment.GetEnvironmentVariable(DataFolderVariable) is { Length: > 0 } named)
+        {
+            return named;
+        }
+
+        string system = Environment.GetFolderPath(Environment.SpecialFolder.LocalApplicationData);
+        return system.Length == 0 ? null : Path.Combine(system, DataFolderName);
     }
 
     /// <summary>The output as a console for tables; made when a command draws one, since it is slow to start.</summary>

@@ -48,6 +48,9 @@ public sealed record Figure(
     /// <summary>The earlier figures it was carried from.</summary>
     public IReadOnlyList<Figure> RestsOn { get; init; } = [];
 
+    /// <summary>The words it was given or assumed in; null for one measured or computed, and where several entries make it.</summary>
+    public string? Written { get; init; }
+
     /// <summary>True for a gasket opening traced as an area.</summary>
     public bool IsArea { get; init; }
 }

@@ -1,3 +1,4 @@
+using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
 
 namespace RebuildPlanner.Core.Jobs;
@@ -110,8 +111,17 @@ public sealed record Caution(string Code, string Text, string? Cylinder = null, 
 /// <param name="Cylinder">The cylinder.</param>
 public sealed record MissingFigure(string What, string Cylinder);
 
-/// <summary>Where a figure used came from.</summary>
-public sealed record ProvenanceLine(string What, string Cylinder, FigureKind Kind, Stage? Stage, string? From, string? Gauge);
+/// <summary>A figure used, and where it came from.</summary>
+/// <param name="What">Its word.</param>
+/// <param name="Cylinder">The cylinder.</param>
+/// <param name="Kind">Measured, computed, given or assumed.</param>
+/// <param name="Stage">The stage it is of, or null for one that holds throughout.</param>
+/// <param name="From">Who gave it, the part it belongs to, or what it was carried through.</param>
+/// <param name="Gauge">The gauge that read it.</param>
+/// <param name="Value">Its value and standard uncertainty.</param>
+/// <param name="Written">The words a given or assumed figure was written in.</param>
+public sealed record ProvenanceLine(
+    string What, string Cylinder, FigureKind Kind, Stage? Stage, string? From, string? Gauge, ResultQuantity Value, string? Written);
 
 /// <summary>Everything known of an engine at one stage: what every face prints, computed once.</summary>
 public sealed record Results(string Job, Stage Stage)
@@ -140,6 +150,10 @@ public sealed record Results(string Job, Stage Stage)
     /// <summary>What is missing.</summary>
     public IReadOnlyList<MissingFigure> Missing { get; init; } = [];
 
-    /// <summary>Where every figure used came from.</summary>
+    /// <summary>Every figure used and where it came from; of one thing on one cylinder the one that counts first, then those it was carried from.</summary>
     public IReadOnlyList<ProvenanceLine> Provenance { get; init; } = [];
+
+    /// <summary>The figure that counts for a thing on a cylinder, or null where none was used.</summary>
+    public ProvenanceLine? Used(What what, string cylinder) =>
+        Provenance.FirstOrDefault(line => line.What == WhatWords.Of(what) && line.Cylinder == cylinder);
 }

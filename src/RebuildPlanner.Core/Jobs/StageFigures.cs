@@ -127,6 +127,15 @@ public sealed class StageFigures
             figure.Value + halfWidth, Math.Max(least, figure.Worst.Low), figure.Worst.High);
     }
 
+    /// <summary>Value and doubt of a figure that went into the results.</summary>
+    public ResultQuantity Quantity(Figure figure)
+    {
+        QuantityKind kind = figure.IsArea ? QuantityKind.Area
+            : (int)figure.What < WhatTable.Lines.Count ? WhatTable.Line(figure.What).Rule.Kinds[0] : QuantityKind.Length;
+        return new ResultQuantity(
+            figure.Estimate.Value, kind, Propagation.StandardUncertainty(_model.Model.Sources, Row(figure.Estimate.Terms)));
+    }
+
     private LinearFigure? LargestDifference<TGroup, TOther>(int cylinder, Func<Place, TGroup> same, Func<Place, TOther?> other)
         where TOther : struct
     {

@@ -31,7 +31,7 @@ public static class StageResults
             Missing = model.Missing,
             Provenance = [.. model.Used.Select(used => new ProvenanceLine(
                 WhatWords.Of(used.Figure.What), model.Search.Parts.Label(used.Cylinder), used.Figure.Kind, used.Figure.Stage, used.Figure.From,
-                used.Figure.Gauge))],
+                used.Figure.Gauge, figures.Quantity(used.Figure), used.Figure.Written))],
         };
     }
 

@@ -65,7 +65,11 @@ public sealed class StatedFigures(Job job, EngineParts parts, SourceBook book)
                     EstimateOf(candidate.Entry.Value, what, (kind, candidate.Index, Owner(what, candidate.Entry, cylinder)), book))),
         ];
         StatedFigure last = relevant.Last(candidate => candidate.Entry.Place.Narrowness == narrowest).Entry;
-        return new Figure(what, PlacedEstimate.Together(what, places), kind, stage, last.From, null, places) { IsArea = last.Value.Kind == QuantityKind.Area };
+        return new Figure(what, PlacedEstimate.Together(what, places), kind, stage, last.From, null, places)
+        {
+            IsArea = last.Value.Kind == QuantityKind.Area,
+            Written = places.Length == 1 ? last.Value.Text : null,
+        };
     }
 
     private bool Covers(Place place, int cylinder, Stage? stage) =>
@@ -106,6 +110,7 @@ public sealed class StatedFigures(Job job, EngineParts parts, SourceBook book)
             new(what, EstimateOf(written, what, identity, book), FigureKind.Given, stage, from, null, [])
             {
                 IsArea = written.Kind == QuantityKind.Area,
+                Written = written.Text,
             };
     }
 
@@ -130,6 +135,6 @@ public sealed class StatedFigures(Job job, EngineParts parts, SourceBook book)
         };
         return written is null
             ? null
-            : new Figure(what, EstimateOf(written, what, ("engine", owner), book), FigureKind.Given, null, "engine", null, []);
+            : new Figure(what, EstimateOf(written, what, ("engine", owner), book), FigureKind.Given, null, "engine", null, []) { Written = written.Text };
     }
 }

@@ -5,12 +5,15 @@ public static class Dimension
 {
     private const double ArrowMm = 1.8, ArrowHalfWidthMm = 0.35, GapMm = 0.7, PastMm = 1.0, OutsideMm = 3.5, SizePt = 7.5, AboveMm = 0.8;
 
+    // How wide a letter of a figure is, near enough to see whether it fits.
+    private const double LetterMm = 1.45;
+
     /// <summary>A height, between two levels, dimensioned beside the part.</summary>
     /// <param name="fromXMm">Where the witness lines start, mm.</param>
     /// <param name="topMm">The upper level, mm.</param>
     /// <param name="bottomMm">The lower level, mm.</param>
     /// <param name="lineXMm">Where the dimension line stands, mm.</param>
-    /// <param name="text">The figure.</param>
+    /// <param name="text">The figure, or nothing where it is said elsewhere.</param>
     public static IEnumerable<Shape> Vertical(double fromXMm, double topMm, double bottomMm, double lineXMm, string text)
     {
         double side = Math.Sign(lineXMm - fromXMm);
@@ -23,8 +26,15 @@ public static class Dimension
         yield return new Line(new(lineXMm, topMm - over), new(lineXMm, bottomMm + over), Pen.Fine);
         yield return Arrow(new(lineXMm, topMm), 0.0, outside ? 1.0 : -1.0);
         yield return Arrow(new(lineXMm, bottomMm), 0.0, outside ? -1.0 : 1.0);
-        yield return outside
-            ? new Label(new(lineXMm + (side * AboveMm), topMm - AboveMm), text, SizePt, side > 0 ? Anchor.Start : Anchor.End)
+        if (text.Length == 0)
+        {
+            yield break;
+        }
+
+        double beside = lineXMm + (side * (AboveMm + 0.4));
+        Anchor away = side > 0 ? Anchor.Start : Anchor.End;
+        yield return outside ? new Label(new(beside, topMm - AboveMm), text, SizePt, away)
+            : text.Length * LetterMm > bottomMm - topMm ? new Label(new(beside, (0.5 * (topMm + bottomMm)) + 1.0), text, SizePt, away)
             : new Label(new(lineXMm - AboveMm, 0.5 * (topMm + bottomMm)), text, SizePt, Anchor.Middle, Upright: true);
     }
 
@@ -42,7 +52,8 @@ public static class Dimension
         yield return new Line(new(leftMm, lineYMm), new(rightMm, lineYMm), Pen.Fine);
         yield return Arrow(new(leftMm, lineYMm), -1.0, 0.0);
         yield return Arrow(new(rightMm, lineYMm), 1.0, 0.0);
-        yield return new Label(new(0.5 * (leftMm + rightMm), lineYMm - AboveMm), text, SizePt, Anchor.Middle);
+        double aboveMm = text.Length * LetterMm > rightMm - leftMm ? AboveMm + PastMm : AboveMm; // clear of the witness lines where it overhangs them
+        yield return new Label(new(0.5 * (leftMm + rightMm), lineYMm - aboveMm), text, SizePt, Anchor.Middle);
     }
 
     private static Polygon Arrow(Spot tip, double xDirection, double yDirection)

@@ -36,7 +36,7 @@ public sealed record Points(IReadOnlyList<string> Items) : Block;
 public sealed record Facts(IReadOnlyList<(string Name, string Value)> Pairs) : Block;
 
 /// <summary>A figure with its caption; it never breaks.</summary>
-public sealed record Figure(Picture Picture, string Caption) : Block;
+public sealed record Illustration(Picture Picture, string Caption) : Block;
 
 /// <summary>Blocks in a frame, kept on one page.</summary>
 public sealed record Framed(IReadOnlyList<Block> Blocks) : Block;

@@ -45,7 +45,7 @@ internal static class FactsFlow
             {
                 for (int line = 0; line < lines.Count; line++)
                 {
-                    flow.Text(xMm + nameMm, flow.YMm + (line * PageFlow.LineMm(SizePt)), lines[line], SizePt, bold: true);
+                    flow.Text(xMm + nameMm, flow.YMm + (line * PageFlow.LineMm(SizePt)), PageFlow.Broken(lines, line), SizePt, bold: true);
                 }
             });
         }

@@ -7,8 +7,8 @@ public sealed class PageFlow
 {
     private const double MmPerPt = 25.4 / 72.0, Leading = 1.32;
 
-    // A heading at the foot of a page with nothing under it belongs to the next page.
-    private const double KeptUnderHeadingMm = 24.0;
+    // Of a list, a heading keeps about two points with it.
+    private const double KeptOfTextMm = 15.0;
 
     private readonly Paper _paper;
     private readonly ITextRuler _ruler;
@@ -78,6 +78,9 @@ public sealed class PageFlow
         }
     }
 
+    /// <summary>A line of wrapped text; where more follows with the blank it was broken at, for who copies the text out of the page.</summary>
+    internal static string Broken(IReadOnlyList<string> lines, int line) => line + 1 < lines.Count ? lines[line] + ' ' : lines[line];
+
     /// <summary>A rule across.</summary>
     internal void Rule(double fromXMm, double toXMm, double yMm, double widthMm) =>
         In(Role.Artifact, () => Add(new ShapeMark(new Line(new(fromXMm, yMm), new(toXMm, yMm), new Pen(widthMm)))));
@@ -100,17 +103,44 @@ public sealed class PageFlow
     {
         for (int index = 0; index < blocks.Count; index++)
         {
-            Place(blocks[index], index + 1 < blocks.Count ? blocks[index + 1] : null);
+            if (blocks[index] is Heading heading)
+            {
+                PlaceHeading(heading, LeastMm(blocks, index + 1));
+            }
+            else
+            {
+                Place(blocks[index]);
+            }
         }
     }
 
-    private void Place(Block block, Block? next)
+    /// <summary>What a heading must not stand without: the paragraphs under it and the least of what follows them, mm.</summary>
+    private double LeastMm(IReadOnlyList<Block> blocks, int from)
+    {
+        double sumMm = 0.0;
+        for (int index = from; index < blocks.Count; index++)
+        {
+            switch (blocks[index])
+            {
+                case Paragraph or Heading:
+                    sumMm += HeightOf([blocks[index]], _leftMm, _widthMm);
+                    break;
+                case Table table:
+                    return sumMm + TableFlow.LeastMm(this, table);
+                case Points or Facts:
+                    return sumMm + KeptOfTextMm;
+                default:
+                    return sumMm + HeightOf([blocks[index]], _leftMm, _widthMm);
+            }
+        }
+
+        return sumMm;
+    }
+
+    private void Place(Block block)
     {
         switch (block)
         {
-            case Heading heading:
-                PlaceHeading(heading, next);
-                break;
             case Paragraph paragraph:
                 PlaceParagraph(paragraph);
                 break;
@@ -123,7 +153,7 @@ public sealed class PageFlow
             case Table table:
                 TableFlow.Place(this, table);
                 break;
-            case Figure figure:
+            case Illustration figure:
                 PlaceFigure(figure);
                 break;
             case Framed framed:
@@ -157,11 +187,10 @@ public sealed class PageFlow
         return trial._yMm - Paper.TopMm;
     }
 
-    private void PlaceHeading(Heading heading, Block? next)
+    private void PlaceHeading(Heading heading, double underMm)
     {
         (double sizePt, double aboveMm, double belowMm) = heading.Level switch { 1 => (18.0, 0.0, 1.5), 2 => (12.5, 5.0, 1.5), _ => (10.0, 3.0, 0.8) };
         IReadOnlyList<string> lines = Wrapping.Lines(heading.Text, sizePt, bold: true, _widthMm);
-        double underMm = next is Figure or Framed or Together or Signatures ? HeightOf([next], _leftMm, _widthMm) : next is null ? 0.0 : KeptUnderHeadingMm;
         Keep(aboveMm + (lines.Count * LineMm(sizePt)) + belowMm + underMm);
         if (!_isEmptyPage)
         {
@@ -208,15 +237,15 @@ public sealed class PageFlow
 
     private void Lines(IReadOnlyList<string> lines, double sizePt, bool bold, double xMm)
     {
-        foreach (string line in lines)
+        for (int line = 0; line < lines.Count; line++)
         {
             Keep(LineMm(sizePt));
-            Text(xMm, _yMm, line, sizePt, bold);
+            Text(xMm, _yMm, Broken(lines, line), sizePt, bold);
             Down(LineMm(sizePt));
         }
     }
 
-    private void PlaceFigure(Figure figure)
+    private void PlaceFigure(Illustration figure)
     {
         const double CaptionPt = 8.0;
         Picture picture = figure.Picture;

@@ -38,7 +38,7 @@ public static class SheetText
                 text.AppendLine(string.Join(" | ", table.Columns.Select(column => column.Title)));
                 text.AppendJoin('\n', table.Rows.Select(row => string.Join(" | ", row))).Append('\n');
                 break;
-            case Figure figure:
+            case Illustration figure:
                 text.AppendLine($"[figure] {figure.Picture.Title}: {figure.Picture.Alternative}").AppendLine($"[caption] {figure.Caption}");
                 break;
             case Framed framed:

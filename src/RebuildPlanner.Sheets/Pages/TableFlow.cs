@@ -7,6 +7,10 @@ internal sealed class TableFlow
 {
     private const double PadXMm = 1.5, PadYMm = 0.7, HairMm = 0.1, RuleMm = 0.3;
 
+    // A table as low as this is not broken at all; a higher one keeps its first rows with its head.
+    private const double UnbrokenMm = 70.0;
+    private const int FirstRows = 3;
+
     // A word without end is broken rather than let squeeze the figures beside it: no word keeps more than this part of the width.
     private const double MostOfWord = 0.3;
 
@@ -21,7 +25,7 @@ internal sealed class TableFlow
     private TableFlow(PageFlow flow, Table table)
     {
         (_flow, _table) = (flow, table);
-        _sizePt = _sizesPt.FirstOrDefault(size => Enumerable.Range(0, table.Columns.Count).Sum(column => LeastMm(column, size)) <= flow.WidthMm, _sizesPt[^1]);
+        _sizePt = _sizesPt.FirstOrDefault(size => Enumerable.Range(0, table.Columns.Count).Sum(column => LeastColumnMm(column, size)) <= flow.WidthMm, _sizesPt[^1]);
         _widthsMm = Widths();
     }
 
@@ -34,10 +38,21 @@ internal sealed class TableFlow
         flow.Down(2.5);
     }
 
+    /// <summary>The least of a table that stands on one page, mm.</summary>
+    public static double LeastMm(PageFlow flow, Table table) => new TableFlow(flow, table).LeastMm();
+
+    private double HeadMm => HeightMm(_table.Columns.Select(column => column.Title), bold: true);
+
+    private double LeastMm()
+    {
+        double rowsMm = _table.Rows.Sum(RowHeightMm);
+        return HeadMm + (rowsMm <= UnbrokenMm ? rowsMm : _table.Rows.Take(FirstRows).Sum(RowHeightMm));
+    }
+
     private void PlaceRows()
     {
-        double headMm = HeightMm(_table.Columns.Select(column => column.Title), bold: true), firstMm = _table.Rows.Count > 0 ? RowHeightMm(_table.Rows[0]) : 0.0;
-        if (!_flow.Fits(headMm + firstMm))
+        double headMm = HeadMm;
+        if (!_flow.Fits(LeastMm()))
         {
             _flow.TurnPage();
         }
@@ -87,7 +102,7 @@ internal sealed class TableFlow
                 for (int line = 0; line < lines.Count; line++)
                 {
                     double topMm = _flow.YMm + PadYMm + (line * PageFlow.LineMm(_sizePt));
-                    _flow.Text(isText ? leftMm : rightMm, topMm, lines[line], _sizePt, bold, isText ? Anchor.Start : Anchor.End);
+                    _flow.Text(isText ? leftMm : rightMm, topMm, isText ? PageFlow.Broken(lines, line) : lines[line], _sizePt, bold, isText ? Anchor.Start : Anchor.End);
                 }
             }
 
@@ -132,7 +147,7 @@ internal sealed class TableFlow
 
     private double[] Widths()
     {
-        double[] least = [.. _table.Columns.Select((_, column) => LeastMm(column, _sizePt))];
+        double[] least = [.. _table.Columns.Select((_, column) => LeastColumnMm(column, _sizePt))];
         double[] wanted = [.. _table.Columns.Select((_, column) => WantedMm(column))];
         double roomMm = _flow.WidthMm, leastSum = least.Sum(), wantedSum = wanted.Sum();
         if (leastSum >= roomMm)
@@ -152,7 +167,7 @@ internal sealed class TableFlow
         return [.. wanted.Select(width => width + extraMm)];
     }
 
-    private double LeastMm(int column, double sizePt)
+    private double LeastColumnMm(int column, double sizePt)
     {
         Column of = _table.Columns[column];
         double headMm = _flow.Wrapping.WidestMm(of.Title, sizePt, bold: true, byWords: true);
@@ -166,7 +181,7 @@ internal sealed class TableFlow
         Column of = _table.Columns[column];
         if (of.WidthMm is not null || !of.IsText)
         {
-            return LeastMm(column, _sizePt);
+            return LeastColumnMm(column, _sizePt);
         }
 
         double headMm = _flow.Wrapping.WidestMm(of.Title, _sizePt, bold: true, byWords: true);

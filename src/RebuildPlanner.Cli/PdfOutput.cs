@@ -1,0 +1,32 @@
+using System.CommandLine;
+using System.Text;
+using RebuildPlanner.Sheets.Pages;
+using RebuildPlanner.Sheets.Pdf;
+
+namespace RebuildPlanner.Cli;
+
+/// <summary>Where a printed sheet goes.</summary>
+internal static class PdfOutput
+{
+    /// <summary>The option that says where.</summary>
+    public static Option<string> Option() => new("--out") { Description = "The PDF to write.", HelpName = "sheet.pdf", Required = true };
+
+    /// <summary>Writes a sheet; false after the reason has been written.</summary>
+    public static bool Write(Sheet sheet, string path, Terminal terminal)
+    {
+        byte[] pdf = PdfSheet.Write(sheet, out IReadOnlyList<Rune> unprintable);
+        if (!OutputFile.Write(path, pdf, "%PDF-"u8, terminal.Error))
+        {
+            return false;
+        }
+
+        terminal.Output.WriteLine(path);
+        if (unprintable.Count > 0)
+        {
+            string list = string.Join(", ", unprintable.Select(rune => $"{rune} (U+{rune.Value:X4})"));
+            terminal.Error.WriteLine($"{path}: the type has no shape for {list}; an empty box stands there. The job file inside has them right.");
+        }
+
+        return true;
+    }
+}

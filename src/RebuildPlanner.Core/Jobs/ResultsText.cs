@@ -1,0 +1,59 @@
+using System.Globalization;
+using RebuildPlanner.Core.Quantities;
+
+namespace RebuildPlanner.Core.Jobs;
+
+/// <summary>Results in rounded words and figures, made once for every face that shows them.</summary>
+/// <param name="results">The results.</param>
+/// <param name="system">The units printed in.</param>
+public sealed class ResultsText(Results results, UnitSystem system)
+{
+    /// <summary>What stands where nothing is known.</summary>
+    public const string Dash = "–";
+
+    /// <summary>The word for every cylinder.</summary>
+    public const string All = "all";
+
+    /// <summary>A value without its unit, to two digits of its uncertainty; a dash for none.</summary>
+    public string Value(ResultQuantity? quantity) => End(quantity, known => known.Value);
+
+    /// <summary>One end of a quantity's interval, to the value's decimals; a dash for none.</summary>
+    public string End(ResultQuantity? quantity, Func<ResultQuantity, double?> end) =>
+        quantity is not null && end(quantity) is { } value ? QuantityPrint.Number(value, quantity.Kind, quantity.StandardUncertainty, system) : Dash;
+
+    /// <summary>The unit a kind is printed in.</summary>
+    public string Unit(QuantityKind kind) => QuantityPrint.Unit(kind, system);
+
+    /// <summary>The cylinders as a list, "all" for every one.</summary>
+    public string Cylinders(IEnumerable<string> labels)
+    {
+        string[] distinct = [.. labels.Distinct()];
+        return distinct.Length == results.Cylinders.Count ? All : string.Join(", ", distinct);
+    }
+
+    /// <summary>What is missing, a line a figure.</summary>
+    public IEnumerable<string> Missing() =>
+        results.Missing.GroupBy(missing => missing.What).Select(same => $"{same.Key}: {Cylinders(same.Select(missing => missing.Cylinder))}");
+
+    /// <summary>The cautions, each said once with the cylinders it is about.</summary>
+    public IEnumerable<string> Cautions()
+    {
+        foreach (IGrouping<string, Caution> same in results.Cautions.GroupBy(caution => caution.Text))
+        {
+            string cylinders = Cylinders(same.Select(caution => caution.Cylinder).OfType<string>());
+            yield return cylinders.Length == 0 || cylinders == All ? same.Key : $"Cylinder {cylinders}: {same.Key}";
+        }
+    }
+
+    /// <summary>A probability in per cent. It is never printed as certain: what rounds to 100 % is "> 99.9 %".</summary>
+    public static string Belief(double? probability) => probability switch
+    {
+        null => Dash,
+        > 0.9995 => "> 99.9 %",
+        < 0.0005 => "< 0.1 %",
+        { } known => string.Create(CultureInfo.InvariantCulture, $"{100.0 * known:F1} %"),
+    };
+
+    /// <summary>The belief a limit asks for, in per cent, as it was set.</summary>
+    public static string Level(double level) => string.Create(CultureInfo.InvariantCulture, $"{100.0 * level:0.###} %");
+}

@@ -1,0 +1,109 @@
+using RebuildPlanner.Core.Jobs;
+using RebuildPlanner.Sheets.Pages;
+using RebuildPlanner.Sheets.Templates;
+
+namespace RebuildPlanner.Sheets.Build;
+
+/// <summary>Limits and verdicts: each limit in a sentence, then cylinder by cylinder.</summary>
+internal static class LimitsPart
+{
+    private const int ColumnsATable = 5;
+
+    public static IEnumerable<Block> Of(Results results, ResultsText text, SheetWording words)
+    {
+        yield return new Heading(words.Of(Phrase.LimitsHead), 2);
+        if (results.Verdicts.Count == 0)
+        {
+            yield return new Paragraph(words.Of(Phrase.LimitsNone));
+            yield break;
+        }
+
+        yield return new Points([.. Limits(results).Select(limit => Sentence(limit, text, words))]);
+        Verdict[][] byCylinder = [.. Limits(results).Where(limit => limit.Length > 1)];
+        if (byCylinder.Length > 0)
+        {
+            yield return new Paragraph(words.Of(Phrase.LimitsTable), Style.Small);
+        }
+
+        foreach (Verdict[][] columns in byCylinder.Chunk(ColumnsATable))
+        {
+            yield return Table(results, columns, words);
+        }
+    }
+
+    /// <summary>The verdict on each limit as a whole: on all its cylinders together, or on the one it names.</summary>
+    public static IEnumerable<Verdict> Whole(Results results) => Limits(results).Select(Whole);
+
+    /// <summary>A limit by name.</summary>
+    public static string Name(Verdict verdict, SheetWording words) => verdict.Cylinder is { } cylinder
+        ? words.Of(Phrase.LimitOfCylinder, ("what", verdict.What), ("limit", verdict.Limit), ("cylinder", cylinder))
+        : words.Of(Phrase.LimitName, ("what", verdict.What), ("limit", verdict.Limit));
+
+    private static Verdict Whole(Verdict[] limit) => limit[^1];
+
+    /// <summary>The verdicts limit by limit: each cylinder's, and last the one on all of them, unless the limit names one cylinder.</summary>
+    private static IEnumerable<Verdict[]> Limits(Results results)
+    {
+        List<Verdict> limit = [];
+        foreach (Verdict verdict in results.Verdicts)
+        {
+            // A limit on one cylinder has that verdict alone; the next line is then another limit.
+            bool another = limit.Count > 0 && (limit[^1].What, limit[^1].Limit, limit[^1].Level) != (verdict.What, verdict.Limit, verdict.Level);
+            bool repeated = verdict.Cylinder is { } cylinder && limit.Any(earlier => earlier.Cylinder == cylinder);
+            if (another || repeated)
+            {
+                yield return [.. limit];
+                limit.Clear();
+            }
+
+            limit.Add(verdict);
+            if (verdict.Cylinder is null)
+            {
+                yield return [.. limit];
+                limit.Clear();
+            }
+        }
+
+        if (limit.Count > 0)
+        {
+            yield return [.. limit];
+        }
+    }
+
+    private static string Sentence(Verdict[] limit, ResultsText text, SheetWording words)
+    {
+        Verdict whole = Whole(limit);
+        (string, string) name = ("limit", Name(whole, words)), belief = ("belief", ResultsText.Belief(whole.Probability)),
+            level = ("level", ResultsText.Level(whole.Level));
+        switch (whole.State)
+        {
+            case VerdictState.Within:
+                return words.Of(Phrase.LimitWithin, name, belief, level);
+            case VerdictState.Outside:
+                return words.Of(Phrase.LimitOutside, name, belief, level);
+            case VerdictState.NotProven when whole.Probability is null:
+                return words.Of(Phrase.LimitMissing, name, ("what", whole.Settle ?? whole.What));
+        }
+
+        IEnumerable<string> settling = limit
+            .Where(verdict => verdict is { Cylinder: not null, State: VerdictState.NotProven, Settle: not null } && verdict.Settle != whole.Settle)
+            .GroupBy(verdict => verdict.Settle!)
+            .Select(same => words.Of(
+                Phrase.LimitSettleCylinders, ("cylinders", text.Cylinders(same.Select(verdict => verdict.Cylinder!))), ("what", same.Key)));
+        string settle = whole.Settle is { } what ? words.Of(Phrase.LimitSettle, ("what", what)) : words.Of(Phrase.LimitNoSettle);
+        return string.Join(' ', [words.Of(Phrase.LimitOpen, name, belief, level), settle, .. settling]);
+    }
+
+    private static Table Table(Results results, Verdict[][] columns, SheetWording words)
+    {
+        IEnumerable<string?> rows = results.Cylinders.Select(cylinder => (string?)cylinder.Cylinder).Append(null);
+        return new Table(
+            [new Column(words.Of(Phrase.Cylinder), IsText: true), .. columns.Select(limit => new Column(Name(limit[0] with { Cylinder = null }, words), IsText: true))],
+            [.. rows.Select(row => (IReadOnlyList<string>)[row ?? words.Of(Phrase.All), .. columns.Select(limit => Cell(limit, row))])]);
+    }
+
+    private static string Cell(Verdict[] limit, string? cylinder) =>
+        limit.FirstOrDefault(verdict => verdict.Cylinder == cylinder) is { } verdict
+            ? $"{ResultsJson.WordOf(verdict.State)} {ResultsText.Belief(verdict.Probability)}"
+            : ResultsText.Dash;
+}
