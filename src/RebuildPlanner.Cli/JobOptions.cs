@@ -61,12 +61,17 @@ internal static class JobOptions
         }
 
         terminal.Error.WriteLine($"{path}: no cylinder can be computed at the stage {StageWords.Of(results.Stage)}. Missing:");
+        SayMissing(results, terminal);
+        return true;
+    }
+
+    /// <summary>Says what is missing, a line a figure.</summary>
+    public static void SayMissing(Results results, Terminal terminal)
+    {
         foreach (string missing in new ResultsText(results, UnitSystem.Metric).Missing())
         {
             terminal.Error.WriteLine($"  {missing}");
         }
-
-        return true;
     }
 
     /// <summary>1 where some verdict is outside, else 0.</summary>

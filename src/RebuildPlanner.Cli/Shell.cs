@@ -37,6 +37,9 @@ public static class Shell
         {
             ResultsCommand.Make(terminal),
             SheetCommand.Make(terminal),
+            FormCommand.Make(terminal),
+            FigureCommand.Make(terminal),
+            TemplatesCommand.Make(terminal),
             CompletionsCommand.Make(terminal),
         };
         ExampleHelp.AddTo(root);

@@ -43,7 +43,7 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
         };
         if (spread is { } output)
         {
-            return [new Line(null, figures.Spread(output), FirstMissing(null) ?? limit.Subject.Word)];
+            return [new Line(null, figures.Spread(output), FirstMissing(limit.Subject, null))];
         }
 
         IEnumerable<int> cylinders = Enumerable.Range(0, model.Job.Engine.Cylinders).Where(cylinder => model.Search.Parts.Covers(limit.Place, cylinder));
@@ -73,7 +73,7 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
             { What: { } what } => OfWhat(what),
             _ => null,
         };
-        return new Line(label, figure, figure is null ? lacks ?? FirstMissing(cylinder) ?? limit.Subject.Word : null);
+        return new Line(label, figure, figure is null ? lacks ?? FirstMissing(limit.Subject, cylinder) : null);
 
         LinearFigure? Difference(What minuend, What subtrahend, double factor)
         {
@@ -105,8 +105,21 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
         }
     }
 
-    private string? FirstMissing(int? cylinder) =>
-        model.Missing.FirstOrDefault(missing => cylinder is null || missing.Cylinder == model.Search.Parts.Label(cylinder.Value))?.What;
+    /// <summary>The first figure missing of those the subject rests on; its own word where none of them is.</summary>
+    private string FirstMissing(Subject subject, int? cylinder)
+    {
+        What[]? restsOn = subject.Derived switch
+        {
+            Derived.PistonToHead => [What.GasketThickness, What.Deck],
+            Derived.ChamberSpread => [What.Chamber],
+            Derived.Taper or Derived.OutOfRound => [],
+            _ => null,
+        };
+        IEnumerable<string> missing = model.Missing
+            .Where(missing => cylinder is null || missing.Cylinder == model.Search.Parts.Label(cylinder.Value)).Select(missing => missing.What);
+        string own = restsOn is [] ? WhatWords.Of(What.Bore) : subject.Word; // a bore read at one place has no taper
+        return missing.FirstOrDefault(word => restsOn is null || restsOn.Any(what => WhatWords.Of(what) == word)) ?? own;
+    }
 
     private Verdict Judge(Limit limit, string? cylinder, Line[] lines)
     {

@@ -24,7 +24,7 @@ internal static class CylindersPart
             (words.Of(Phrase.Bore, length), cylinder => Value(cylinder.Bore)),
             (words.Of(Phrase.Swept, volume), cylinder => Value(cylinder.SweptVolume)),
             (words.Of(Phrase.Clearance, volume), cylinder => Value(cylinder.ClearanceVolume)));
-        yield return Known(
+        Table second = Known(
             results, words,
             (words.Of(Phrase.PistonToHead, length), cylinder => Value(cylinder.PistonToHead)),
             (words.Of(Phrase.From95), cylinder => End(cylinder.PistonToHead, q => q.Low)),
@@ -36,6 +36,11 @@ internal static class CylindersPart
             (words.Of(Phrase.Doubt), cylinder => cylinder.Shares is [{ } most, ..]
                 ? words.Of(Phrase.Share, ("what", most.Input), ("percent", (100.0 * most.Share).ToString("F0", CultureInfo.InvariantCulture)))
                 : null));
+        if (second.Columns.Count > 1)
+        {
+            yield return second;
+        }
+
         if (results.Cylinders.Any(cylinder => cylinder.CrankingPressure is not null))
         {
             yield return new Paragraph(words.Of(Phrase.CrankingNote), Style.Small);

@@ -8,7 +8,7 @@ using RebuildPlanner.Sheets.Templates;
 namespace RebuildPlanner.Sheets.Build;
 
 /// <summary>The two figures of a sheet with what belongs to them.</summary>
-internal static class FiguresPart
+public static class FiguresPart
 {
     /// <summary>The clearance volume, drawn and in figures.</summary>
     public static IEnumerable<Block> Volumes(SheetInput input, Results results, ResultsText text)

@@ -7,7 +7,7 @@ namespace RebuildPlanner.Sheets.Build;
 /// <summary>Limits and verdicts: each limit in a sentence, then cylinder by cylinder.</summary>
 internal static class LimitsPart
 {
-    private const int ColumnsATable = 5;
+    private const int MostColumns = 6;
 
     public static IEnumerable<Block> Of(Results results, ResultsText text, SheetWording words)
     {
@@ -25,7 +25,9 @@ internal static class LimitsPart
             yield return new Paragraph(words.Of(Phrase.LimitsTable), Style.Small);
         }
 
-        foreach (Verdict[][] columns in byCylinder.Chunk(ColumnsATable))
+        // As few tables as will do, and all about as wide.
+        int tables = (byCylinder.Length + MostColumns - 1) / MostColumns;
+        foreach (Verdict[][] columns in byCylinder.Chunk(tables == 0 ? 1 : (byCylinder.Length + tables - 1) / tables))
         {
             yield return Table(results, columns, words);
         }
@@ -98,7 +100,7 @@ internal static class LimitsPart
     {
         IEnumerable<string?> rows = results.Cylinders.Select(cylinder => (string?)cylinder.Cylinder).Append(null);
         return new Table(
-            [new Column(words.Of(Phrase.Cylinder), IsText: true), .. columns.Select(limit => new Column(Name(limit[0] with { Cylinder = null }, words), IsText: true))],
+            [new Column(words.Of(Phrase.Cylinder), IsText: true), .. columns.Select(limit => new Column(Name(limit[0] with { Cylinder = null }, words)))],
             [.. rows.Select(row => (IReadOnlyList<string>)[row ?? words.Of(Phrase.All), .. columns.Select(limit => Cell(limit, row))])]);
     }
 

@@ -17,7 +17,7 @@ public enum Phrase
     CheckResult, Notes, OriginsHead, OriginsLead, OriginKind, OriginFigure, OriginCylinders, OriginValue, OriginFrom, OriginRange,
     CautionsHead, SignHead, SignMeasured, SignMachined, SignChecked, SignCustomer, Attached, FormTitle, FormLead, FormFoot,
     FormGaugesHead, FormGauge, FormKind, FormResolution, FormLimit, FormSetWith, FormCalibrated, FormRatioHead, FormFitsHead,
-    FormPlace, FormGaugeColumn, FormTemperature, FormStart, FormEnd, FormDrop, FormRemarks, FormBy, FormEngine, FormTorquePlate,
+    FormPlace, FormGaugeColumn, FormTemperature, FormStart, FormEnd, FormRefillStart, FormRefillEnd, FormDrop, FormBlank, FormRemarks, FormBy, FormEngine, FormHeadOf, FormBankOf, FormTorquePlate,
     FormDeckWords, FormCrownWords, FormProtrusionWords,
 }
 #pragma warning restore CS1591
