@@ -3,6 +3,9 @@ namespace RebuildPlanner.Sheets.Drawing;
 /// <summary>Parallel lines inside an outline: cut metal, and the parts of a bar told apart without colour.</summary>
 public static class Hatching
 {
+    // Through a corner a line has no length, only a blot.
+    private const double ShortestMm = 0.01;
+
     /// <summary>The lines.</summary>
     /// <param name="corners">The outline, which may be hollow but not cross itself.</param>
     /// <param name="spacingMm">Between the lines, mm.</param>
@@ -33,6 +36,11 @@ public static class Hatching
             crossings.Sort();
             for (int pair = 0; pair + 1 < crossings.Count; pair += 2)
             {
+                if (crossings[pair + 1] - crossings[pair] < ShortestMm)
+                {
+                    continue;
+                }
+
                 yield return new Line(At(crossings[pair], line), At(crossings[pair + 1], line), Pen.Fine);
             }
         }

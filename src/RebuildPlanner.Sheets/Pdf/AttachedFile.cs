@@ -61,7 +61,7 @@ public static class AttachedFile
                 }
             }
         }
-        catch (Exception problem) when (problem is PdfReaderException or InvalidOperationException or FormatException or ArgumentException or IOException)
+        catch (Exception problem) when (problem is not OutOfMemoryException) // the library throws plain exceptions at what is no PDF
         {
             return null;
         }

@@ -1,0 +1,141 @@
+using RebuildPlanner.Core.Jobs;
+using RebuildPlanner.Core.Measuring;
+using RebuildPlanner.Core.Quantities;
+using RebuildPlanner.Sheets.Build;
+using RebuildPlanner.Sheets.Drawing;
+using RebuildPlanner.Sheets.Figures;
+using RebuildPlanner.Sheets.Templates;
+
+namespace RebuildPlanner.Sheets.Tests.Figures;
+
+public class FigureTests
+{
+    private static readonly Job Van = SheetFiles.Sample("van-four.json");
+
+    private static readonly Results VanResults = StageResults.Of(Van, Stage.AsMachined);
+
+    public static TheoryData<string> Samples => [.. SheetFiles.Samples];
+
+    // The dashed circle is the crankpin's path: its radius on paper, by the scale written beside it, is half the stroke.
+    [Fact]
+    public void The_section_is_to_the_scale_written_on_it()
+    {
+        Picture section = FiguresPart.Section(SheetFiles.Input(Van), VanResults, VanResults.Cylinders[0])!;
+
+        Assert.Contains(section.Shapes.OfType<Label>(), label => label.Text == "scale 1 : 2");
+        Circle path = Assert.Single(section.Shapes.OfType<Circle>(), circle => circle.Pen == Pen.Dashed);
+        Assert.Equal(0.5 * 0.5 * 88.0, path.RadiusMm, 1e-9); // stroke 88 mm
+        double pinYMm = section.Shapes.OfType<Circle>().Where(circle => circle.RadiusMm == 0.6).Min(circle => circle.Centre.YMm);
+        Assert.Equal(0.5 * (140.0 + 44.0), path.Centre.YMm - pinYMm, 1e-9); // rod and throw stand in one line at top dead centre
+        double bore = VanResults.Cylinders[0].Bore!.Value;
+        double[] bottom = [.. section.Shapes.OfType<Line>().Where(line => line.Pen == Pen.Dashed && line.From.YMm == line.To.YMm).Select(line => line.To.XMm - line.From.XMm)];
+        Assert.Contains(bottom, width => Math.Abs(width - (0.5 * bore)) < 1e-9);
+    }
+
+    // At 10 : 1 the gasket of 1.21 mm (the middle of 1.20 +0.05/-0.03) is 12.1 mm high, and the crown's edge lies the deck's 0.225 mm lower than the block.
+    [Fact]
+    public void The_enlarged_edge_is_to_its_scale_too()
+    {
+        Picture section = FiguresPart.Section(SheetFiles.Input(Van), VanResults, VanResults.Cylinders[0])!;
+
+        Assert.Contains(section.Shapes.OfType<Label>(), label => label.Text == "edge of the crown, scale 10 : 1");
+        Polygon gasket = Assert.Single(section.Shapes.OfType<Polygon>(), polygon => polygon.Grey == 0.25);
+        double gasketMm = VanResults.Used(What.GasketThickness, "1")!.Value.Value;
+        Assert.Equal(1.21, gasketMm, 1e-12);
+        Assert.Equal(10.0 * gasketMm, gasket.Corners.Max(corner => corner.YMm) - gasket.Corners.Min(corner => corner.YMm), 1e-9);
+        double deckYMm = gasket.Corners.Max(corner => corner.YMm);
+        Polygon piston = section.Shapes.OfType<Polygon>().Last(polygon => polygon is { Grey: 0.9, Pen: null });
+        Assert.Equal(10.0 * VanResults.Used(What.Deck, "1")!.Value.Value, piston.Corners.Min(corner => corner.YMm) - deckYMm, 1e-9);
+    }
+
+    [Fact]
+    public void The_section_is_of_the_cylinder_with_the_least_gap()
+    {
+        Results results = StageResults.Of(SheetFiles.Sample("hill-climb-vee-eight.json"), Stage.AsMachined);
+
+        CylinderResult chosen = CylinderSection.Choose(results)!;
+
+        Assert.Equal(results.Cylinders.Min(cylinder => cylinder.PistonToHead!.Value), chosen.PistonToHead!.Value);
+    }
+
+    [Fact]
+    public void Without_a_rod_the_piston_is_drawn_alone_and_without_a_bore_nothing_is()
+    {
+        Job piston = SheetFiles.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "P" }, "engine": { "cylinders": 1, "stroke": "78 mm" },
+              "given": [ { "what": "bore", "value": "81 mm" } ] }
+            """);
+        Results results = StageResults.Of(piston, Stage.AsReceived);
+
+        Picture section = FiguresPart.Section(SheetFiles.Input(piston), results, results.Cylinders[0])!;
+
+        Assert.DoesNotContain(section.Shapes.OfType<Circle>(), circle => circle.Pen == Pen.Dashed);
+        Results boreless = StageResults.Of(piston with { Given = [] }, Stage.AsReceived);
+        Assert.Null(FiguresPart.Section(SheetFiles.Input(piston), boreless, boreless.Cylinders[0]));
+        Assert.Null(CylinderSection.Choose(boreless));
+        Assert.Null(VolumeBars.Draw(boreless, UnitSystem.Metric, SheetWording.Original));
+    }
+
+    // The white box of a row is its chamber, the black one its gasket: lengths on one scale, whatever the units printed.
+    [Theory]
+    [InlineData(UnitSystem.Metric)]
+    [InlineData(UnitSystem.Inch)]
+    public void Bars_are_as_long_as_the_volumes_they_stand_for(UnitSystem units)
+    {
+        Picture bars = VolumeBars.Draw(VanResults, units, SheetWording.Original)!;
+
+        double[] chambers = Lengths(bars, 1.0, skipLegend: 4), gaskets = Lengths(bars, 0.0, skipLegend: 1);
+        double perMm3 = chambers[0] / VanResults.Cylinders[0].Chamber!.Value;
+        for (int cylinder = 0; cylinder < 4; cylinder++)
+        {
+            Assert.Equal(VanResults.Cylinders[cylinder].Gasket!.Value * perMm3, gaskets[cylinder], 1e-9);
+        }
+
+        // Chamber, deck, crown and top land are white boxes alike (the latter hatched): four a row, in that order.
+        Assert.Equal(VanResults.Cylinders[3].Chamber!.Value * perMm3, chambers[12], 1e-9);
+        Assert.Equal(VanResults.Cylinders[3].Crown!.Value * perMm3, chambers[14], 1e-9);
+    }
+
+    [Fact]
+    public void What_takes_volume_away_runs_to_the_left_of_zero()
+    {
+        Results results = StageResults.Of(SheetFiles.Sample("hill-climb-vee-eight.json"), Stage.AsMachined);
+
+        Picture bars = VolumeBars.Draw(results, UnitSystem.Metric, SheetWording.Original)!;
+
+        double zeroXMm = Assert.Single(bars.Shapes.OfType<Line>(), line => line.Pen == Pen.Outline).From.XMm;
+        Assert.All(results.Cylinders, cylinder => Assert.True(cylinder.Crown!.Value < 0.0)); // domes
+        Assert.Equal(2 * 8, bars.Shapes.OfType<Polygon>().Count(box => box.Corners.Max(corner => corner.XMm) <= zeroXMm + 1e-9 && box.Corners.Min(corner => corner.YMm) > 6.0));
+        Assert.Contains(bars.Shapes.OfType<Label>(), label => label.Text == "chamber missing");
+    }
+
+    [Theory]
+    [MemberData(nameof(Samples))]
+    public void Nothing_is_drawn_outside_the_figure(string sample)
+    {
+        Job job = SheetFiles.Sample(sample);
+        Results results = StageResults.Of(job, LastStage.Of(job));
+        Picture[] pictures =
+        [
+            VolumeBars.Draw(results, UnitSystem.Metric, SheetWording.Original)!,
+            .. results.Cylinders.Select(cylinder => FiguresPart.Section(SheetFiles.Input(job), results, cylinder)!),
+        ];
+
+        Assert.All(pictures, picture => Assert.All(
+            picture.Shapes.SelectMany(Extremes),
+            spot => Assert.True(spot.XMm >= -0.01 && spot.XMm <= picture.WidthMm + 0.01 && spot.YMm >= -0.01 && spot.YMm <= picture.HeightMm + 0.01, $"{picture.Title}: {spot}")));
+    }
+
+    private static IEnumerable<Spot> Extremes(Shape shape) => shape switch
+    {
+        Line line => [line.From, line.To],
+        Polygon polygon => polygon.Corners,
+        Circle circle => [new(circle.Centre.XMm - circle.RadiusMm, circle.Centre.YMm - circle.RadiusMm), new(circle.Centre.XMm + circle.RadiusMm, circle.Centre.YMm + circle.RadiusMm)],
+        Label label => [label.At],
+        _ => [],
+    };
+
+    private static double[] Lengths(Picture picture, double grey, int skipLegend) =>
+        [.. picture.Shapes.OfType<Polygon>().Where(box => box.Grey == grey).Skip(skipLegend).Select(box => box.Corners.Max(corner => corner.XMm) - box.Corners.Min(corner => corner.XMm))];
+}
