@@ -31,7 +31,7 @@ public static class FigureCommand
         Option<string> output = new("--out") { Description = "The file to write; else it is printed.", HelpName = "figure.svg" };
         SheetOptions options = new();
         ExampleCommand command = new("figure", Description, Example) { file, stage, show, cylinder, svg, output };
-        options.AddTo(command);
+        options.AddWithoutPageTo(command);
         command.SetAction(parsed =>
         {
             string path = parsed.GetValue(file)!;

@@ -22,12 +22,18 @@ internal sealed class SheetOptions
 
     private readonly Option<string> _templates = new("--templates") { Description = "Folder of the shop's own templates.", HelpName = "folder" };
 
-    /// <summary>Adds them to a command.</summary>
+    /// <summary>Adds them to a command that prints pages.</summary>
     public void AddTo(Command command)
     {
         command.Options.Add(_paper);
-        command.Options.Add(_unitSystem);
         command.Options.Add(_date);
+        AddWithoutPageTo(command);
+    }
+
+    /// <summary>Adds those that matter to a figure by itself.</summary>
+    public void AddWithoutPageTo(Command command)
+    {
+        command.Options.Add(_unitSystem);
         command.Options.Add(_templates);
     }
 

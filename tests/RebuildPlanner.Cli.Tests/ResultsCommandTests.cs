@@ -126,6 +126,10 @@ public class ResultsCommandTests
     [Theory]
     [InlineData("root", "--help")]
     [InlineData("results", "results", "--help")]
+    [InlineData("sheet", "sheet", "--help")]
+    [InlineData("form", "form", "--help")]
+    [InlineData("figure", "figure", "--help")]
+    [InlineData("templates", "templates", "--help")]
     [InlineData("completions", "completions", "--help")]
     public void Help_reads_as_approved(string name, params string[] args)
     {

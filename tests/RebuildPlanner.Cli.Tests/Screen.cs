@@ -3,10 +3,15 @@ namespace RebuildPlanner.Cli.Tests;
 /// <summary>Runs a command in process and keeps what it wrote.</summary>
 internal sealed record Screen(int ExitCode, string Output, string Error)
 {
-    public static Screen Of(params string[] args)
+    public static DateOnly Today { get; } = new(2026, 12, 1);
+
+    public static Screen Of(params string[] args) => At(dataFolder: null, args);
+
+    /// <summary>Runs a command for a user whose data folder this is.</summary>
+    public static Screen At(string? dataFolder, params string[] args)
     {
         using StringWriter output = new() { NewLine = "\n" }, error = new() { NewLine = "\n" };
-        int code = Shell.Run(args, new Terminal(output, error, Terminal.UsualWidthColumns, IsScreen: false));
+        int code = Shell.Run(args, new Terminal(output, error, Terminal.UsualWidthColumns, IsScreen: false, Today, dataFolder));
         return new Screen(code, output.ToString().ReplaceLineEndings("\n"), error.ToString().ReplaceLineEndings("\n"));
     }
 

@@ -11,7 +11,10 @@ public sealed class CutAmounts(Job job, EngineParts parts, SourceBook book)
         parts.Cuts(kind, cylinder, stage)
             .Where(cut => cut.Cut.Value is not null)
             .Select(cut => new Figure(
-                CutWords.WhatOf(kind), Of(cut.Index, cut.Cut, cylinder), FigureKind.Given, stage, CutWords.Of(kind), null, []));
+                CutWords.WhatOf(kind), Of(cut.Index, cut.Cut, cylinder), FigureKind.Given, stage, CutWords.Of(kind), null, [])
+            {
+                Written = cut.Cut.Value!.Text,
+            });
 
     /// <summary>The amount of one cut, or the finished size of a bore.</summary>
     /// <param name="index">Its place in the job, which tells it from others.</param>

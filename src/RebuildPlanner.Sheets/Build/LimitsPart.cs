@@ -18,7 +18,7 @@ internal static class LimitsPart
             yield break;
         }
 
-        yield return new Points([.. Limits(results).Select(limit => Sentence(limit, text, words))]);
+        yield return new Points([.. Limits(results).Select(limit => Sentence(results, limit, text, words))]);
         Verdict[][] byCylinder = [.. Limits(results).Where(limit => limit.Length > 1)];
         if (byCylinder.Length > 0)
         {
@@ -72,7 +72,7 @@ internal static class LimitsPart
         }
     }
 
-    private static string Sentence(Verdict[] limit, ResultsText text, SheetWording words)
+    private static string Sentence(Results results, Verdict[] limit, ResultsText text, SheetWording words)
     {
         Verdict whole = Whole(limit);
         (string, string) name = ("limit", Name(whole, words)), belief = ("belief", ResultsText.Belief(whole.Probability)),
@@ -84,7 +84,8 @@ internal static class LimitsPart
             case VerdictState.Outside:
                 return words.Of(Phrase.LimitOutside, name, belief, level);
             case VerdictState.NotProven when whole.Probability is null:
-                return words.Of(Phrase.LimitMissing, name, ("what", whole.Settle ?? whole.What));
+                return words.Of(
+                    Phrase.LimitMissing, name, ("what", whole.Settle ?? whole.What), ("cylinders", text.Cylinders(Lacking(results, limit))));
         }
 
         IEnumerable<string> settling = limit
@@ -95,6 +96,11 @@ internal static class LimitsPart
         string settle = whole.Settle is { } what ? words.Of(Phrase.LimitSettle, ("what", what)) : words.Of(Phrase.LimitNoSettle);
         return string.Join(' ', [words.Of(Phrase.LimitOpen, name, belief, level), settle, .. settling]);
     }
+
+    /// <summary>The cylinders a limit has no figure of; for a spread, all those that lack what it rests on.</summary>
+    private static IEnumerable<string> Lacking(Results results, Verdict[] limit) => limit.Length > 1 || limit[0].Cylinder is not null
+        ? limit.Where(verdict => verdict is { Cylinder: not null, Probability: null }).Select(verdict => verdict.Cylinder!)
+        : results.Missing.Where(missing => missing.What == limit[0].Settle).Select(missing => missing.Cylinder);
 
     private static Table Table(Results results, Verdict[][] columns, SheetWording words)
     {

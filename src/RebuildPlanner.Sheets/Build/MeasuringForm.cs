@@ -29,7 +29,7 @@ public static class MeasuringForm
                 (words.Of(Phrase.Customer), input.Job.CustomerName ?? words.Of(Phrase.FormBlank)), (words.Of(Phrase.Job), input.Job.Number),
                 (words.Of(Phrase.Engine), input.Engine), (words.Of(Phrase.Stage), StageWords.Of(stage)), (words.Of(Phrase.FormBy), words.Of(Phrase.FormBlank)),
             ]),
-            new Paragraph(words.Of(Phrase.FormLead, ("unit", QuantityPrint.Unit(QuantityKind.Length, input.Units)))),
+            new Paragraph(words.Of(Phrase.FormLead)),
             new Heading(words.Of(Phrase.FormGaugesHead), 2),
             Gauges(input.Job, words),
             .. Part(Phrase.FormRatioHead, [.. places.Where(place => place.ForRatio)], input),
@@ -69,7 +69,10 @@ public static class MeasuringForm
         foreach (IGrouping<What, RoundPlace> thing in places.GroupBy(place => place.What))
         {
             WhatLine line = WhatTable.Line(thing.Key);
-            yield return new Heading($"{line.Word}, {QuantityPrint.Unit(line.Rule.Kinds[0], input.Units)}", 3);
+            QuantityKind kind = line.Rule.Kinds[0];
+
+            // A burette is graduated in cm³ in every shop.
+            yield return new Heading($"{line.Word}, {QuantityPrint.Unit(kind, kind == QuantityKind.Volume ? UnitSystem.Metric : input.Units)}", 3);
             if (Hint(line, input.Words) is { } hint)
             {
                 yield return new Paragraph(hint, Style.Small);

@@ -55,8 +55,7 @@ internal static partial class FinishedPdf
 
     private const int EntryLength = 20;
 
-    private static bool IsMetadata(string body) => Dictionary(body).Contains("/Type /Metadata", StringComparison.Ordinal)
-        || Dictionary(body).Contains("/Type/Metadata", StringComparison.Ordinal);
+    private static bool IsMetadata(string body) => Dictionary(body).Contains("/Type/Metadata", StringComparison.Ordinal);
 
     private static ReadOnlySpan<char> Dictionary(string body) =>
         body.IndexOf("stream\n", StringComparison.Ordinal) is > 0 and int stream ? body.AsSpan(0, stream) : body;
