@@ -61,46 +61,14 @@ public static class Round
     }
 
     /// <summary>The places still to be read at a stage, in order: those with no reading of that stage that stands.</summary>
+    /// <remarks>
+    /// What the maker states is not read: a crown stated with its piston set is still asked for by fill. Where a deck was begun as a
+    /// protrusion, or the reverse, the rest of that cylinder is asked for in the same word, since the job file refuses the two together.
+    /// </remarks>
     public static IReadOnlyList<RoundPlace> Left(Job job, Stage stage)
     {
-        EngineParts parts = new(job, stage);
-        Dictionary<string, int> cylinders = job.Engine.Labels.Select((label, index) => (label, index)).ToDictionary(pair => pair.label, pair => pair.index);
-        HashSet<(What, Place)> read =
-        [
-            .. job.Readings.Where(reading => reading.Stage == stage && reading.Struck is null).Select(reading => (reading.What, Unnamed(reading, job.Engine))),
-        ];
-        return [.. Of(job.Engine).Where(place => !IsRead(place))];
-
-        bool IsRead(RoundPlace place) =>
-            read.Contains((place.What, place.Place))
-            || (Other(place.What) is { } other && read.Contains((other, place.Place)))
-            || (place.Place.Cylinder is { } cylinder && WhatTable.Line(Other(place.What) ?? place.What).MayBePiece
-                && parts.Piston(cylinders[cylinder], stage)?.Piece is { } piece
-                && read.Contains((Other(place.What) ?? place.What, new Place(Piece: piece))));
-    }
-
-    /// <summary>What else would serve at the same place: a deck by its protrusion and the reverse, a crown read straight in place of its fill.</summary>
-    private static What? Other(What what) => what switch
-    {
-        What.Deck => What.PistonProtrusion,
-        What.PistonProtrusion => What.Deck,
-        What.CrownFill => What.Crown,
-        _ => null,
-    };
-
-    private static Place Unnamed(Reading reading, Engine engine)
-    {
-        // Of flatness the head and the block are two faces, named even where there is one of each.
-        if (reading.What == What.Flatness)
-        {
-            return reading.Place;
-        }
-
-        return reading.Place with
-        {
-            Head = engine.Heads.Count == 1 ? null : reading.Place.Head,
-            Bank = engine.Banks.Count == 1 ? null : reading.Place.Bank,
-        };
+        PlacesRead read = new(job, stage);
+        return [.. Of(job.Engine).Select(read.AsBegun).Where(place => !read.Has(place))];
     }
 
     private static IEnumerable<RoundPlace> Each(What what, IEnumerable<Place> places) => places.Select(place => new RoundPlace(what, place, ForRatio: true));

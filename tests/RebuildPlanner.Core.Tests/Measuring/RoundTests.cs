@@ -108,8 +108,8 @@ public class RoundTests
 
         IReadOnlyList<RoundPlace> left = Round.Left(job, Stage.AsReceived);
 
-        Assert.DoesNotContain(left, place => place.What == What.Deck && place.Place == end);
-        Assert.Contains(left, place => place.What == What.Deck && place.Place.At == At.Rear);
+        Assert.DoesNotContain(left, place => place.What == What.Deck || place.Place == end);
+        Assert.Contains(left, place => place.What == What.PistonProtrusion && place.Place.At == At.Rear);
         Assert.DoesNotContain(left, place => place.What == What.CrownFill);
     }
 
