@@ -44,8 +44,11 @@ public static class Round
             .. Each(What.TopLandHeight, cylinders),
             .. Each(What.TopLandDiameter, cylinders),
             .. Each(What.RodLength, cylinders),
-            .. Fits(What.CompressionHeight, cylinders),
-            .. Fits(What.Skirt, cylinders),
+
+            // A change of piston goes through both: the deck by the compression heights, the finished bore by the skirt.
+            .. Each(What.CompressionHeight, cylinders),
+            .. Each(What.Skirt, cylinders),
+
             .. Fits(What.Wall, cylinders.SelectMany(_ => _clockHours, (place, hours) => place with { At = At.Middle, ClockHours = hours })),
             .. Fits(What.RingGap, cylinders),
             .. Fits(What.MainJournal, [Place.Everywhere]),

@@ -68,6 +68,25 @@ public class RoundTests
         Assert.Equal(round.OrderByDescending(place => place.ForRatio), round); // what the ratio rests on comes first
     }
 
+    // A piston changed or a bore left to the piston: without the compression heights there is no ratio, without the skirt no displacement.
+    [Theory]
+    [InlineData(What.CompressionHeight, "30.0 mm", Stage.AsReceived, """ "readings": [ { "what": "deck", "cylinder": "1", "value": "0.2 mm below", "stage": "as received" } ] """)]
+    [InlineData(What.Skirt, "81.46 mm", Stage.AsMachined, """ "cuts": [ { "what": "bore", "stage": "as machined" } ] """)]
+    public void Ratio_rests_on_the_pistons_own_sizes_once_pistons_are_changed(What what, string size, Stage stage, string work)
+    {
+        Job without = Workbench.Single(
+            work, """ "parts": { "pistons": [ { "id": "old" }, { "id": "new", "compressionHeight": "30.4 mm", "wantedClearance": "0.04 mm" } ] } """,
+            """ "fitted": [ { "stage": "as received", "piston": "old" }, { "stage": "as machined", "piston": "new" } ] """);
+        Quantity read = QuantityText.Read(size, WhatTable.Line(what).Rule, out _)!;
+        Job with = without with { Readings = [.. without.Readings, new Reading(what, new Place(Cylinder: "1"), read, [], Stage: stage)] };
+
+        Assert.Null(RatioOf(without));
+        Assert.NotNull(RatioOf(with));
+        Assert.All(Round.Of(with.Engine).Where(place => place.What == what), place => Assert.True(place.ForRatio));
+
+        static double? RatioOf(Job job) => Workbench.Value(job, Stage.AsMachined, Core.Cylinders.Output.CompressionRatio);
+    }
+
     [Fact]
     public void A_struck_reading_and_one_of_another_stage_leave_their_place_open()
     {
