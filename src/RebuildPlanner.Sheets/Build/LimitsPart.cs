@@ -104,7 +104,8 @@ internal static class LimitsPart
 
     private static Table Table(Results results, Verdict[][] columns, SheetWording words)
     {
-        IEnumerable<string?> rows = results.Cylinders.Select(cylinder => (string?)cylinder.Cylinder).Append(null);
+        // Of one cylinder, all of them are that one.
+        IEnumerable<string?> rows = [.. results.Cylinders.Select(cylinder => cylinder.Cylinder), .. results.Cylinders.Count > 1 ? new string?[1] : []];
         return new Table(
             [new Column(words.Of(Phrase.Cylinder), IsText: true), .. columns.Select(limit => new Column(Name(limit[0] with { Cylinder = null }, words)))],
             [.. rows.Select(row => (IReadOnlyList<string>)[row ?? words.Of(Phrase.All), .. columns.Select(limit => Cell(limit, row))])]);

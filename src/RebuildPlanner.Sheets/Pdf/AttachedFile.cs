@@ -1,4 +1,3 @@
-using System.IO.Compression;
 using PdfSharp.Pdf;
 using PdfSharp.Pdf.IO;
 using RebuildPlanner.Sheets.Pages;
@@ -13,10 +12,11 @@ public static class AttachedFile
     {
         PdfDictionary stream = new(document);
         document.Internals.AddObject(stream);
-        stream.CreateStream(Packed(attachment.Content));
+
+        // Not packed: the bytes would then depend on who packs, and so the job can be read even with a text editor.
+        stream.CreateStream(attachment.Content);
         stream.Elements.SetName("/Type", "/EmbeddedFile");
         stream.Elements.SetName("/Subtype", "/application#2Fjson");
-        stream.Elements.SetName("/Filter", "/FlateDecode");
         PdfDictionary facts = new(document);
         facts.Elements.SetInteger("/Size", attachment.Content.Length);
         facts.Elements.SetDateTime("/CreationDate", date);
@@ -67,17 +67,5 @@ public static class AttachedFile
         }
 
         return null;
-    }
-
-    // The library's own packing leaves out the checksum that readers verify.
-    private static byte[] Packed(byte[] content)
-    {
-        using MemoryStream packed = new();
-        using (ZLibStream zlib = new(packed, CompressionLevel.SmallestSize, leaveOpen: true))
-        {
-            zlib.Write(content);
-        }
-
-        return packed.ToArray();
     }
 }
