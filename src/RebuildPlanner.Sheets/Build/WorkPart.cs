@@ -13,10 +13,13 @@ internal static class WorkPart
         IReadOnlyList<string>[] rows =
         [
             .. job.Fitted.Where(fitted => fitted.Stage <= stage).SelectMany(fitted => Parts(job, fitted, words)),
-            .. job.Cuts.Where(cut => cut.Stage <= stage).Select(cut => (IReadOnlyList<string>)
-            [
-                CutWords.Of(cut.Kind), Where(cut.Place, words), cut.Value?.Text ?? words.Of(Phrase.FinishedToPiston), StageWords.Of(cut.Stage),
-            ]),
+            .. job.Cuts.Where(cut => cut.Stage <= stage)
+                .GroupBy(cut => (cut.Kind, cut.Value?.Text, cut.Stage))
+                .Select(same => (IReadOnlyList<string>)
+                [
+                    CutWords.Of(same.Key.Kind), string.Join("; ", same.Select(cut => Where(cut.Place, words))),
+                    same.Key.Text ?? words.Of(Phrase.FinishedToPiston), StageWords.Of(same.Key.Stage),
+                ]),
         ];
         Check[] checks = [.. job.Checks.Where(check => check.Stage is null || check.Stage <= stage)];
         if (rows.Length == 0 && checks.Length == 0 && job.Notes.Count == 0)

@@ -109,6 +109,12 @@ public sealed class PageFlow
             }
             else
             {
+                // A small paragraph right above a table leads it and stays with it.
+                if (blocks[index] is Paragraph { Style: Style.Small } && index + 1 < blocks.Count && blocks[index + 1] is Table)
+                {
+                    Keep(LeastMm(blocks, index));
+                }
+
                 Place(blocks[index]);
             }
         }

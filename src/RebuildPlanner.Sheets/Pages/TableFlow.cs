@@ -5,7 +5,7 @@ namespace RebuildPlanner.Sheets.Pages;
 /// <summary>Lays a table: columns as wide as their cells need, rows whole, the head again on every page.</summary>
 internal sealed class TableFlow
 {
-    private const double PadXMm = 1.5, PadYMm = 0.7, HairMm = 0.1, RuleMm = 0.3;
+    private const double PadXMm = 1.5, PadYMm = 0.55, HairMm = 0.1, RuleMm = 0.3;
 
     // A table as low as this is not broken at all; a higher one keeps its first rows with its head.
     private const double UnbrokenMm = 70.0;

@@ -56,6 +56,18 @@ public class PageFlowTests
         Assert.Contains("row 2", page);
     }
 
+    [Theory]
+    [InlineData(41)]
+    [InlineData(42)]
+    [InlineData(43)]
+    [InlineData(44)]
+    public void What_leads_a_table_stays_with_it(int paragraphs)
+    {
+        string[][] pages = PagesOf(SheetFiles.Of([.. Enumerable.Repeat(new Paragraph("filling"), paragraphs), new Paragraph("lead", Style.Small), TableOf("row 1", "row 2")]));
+
+        Assert.Contains("row 2", Assert.Single(pages, page => page.Contains("lead")));
+    }
+
     [Fact]
     public void A_figure_and_what_is_framed_stay_whole()
     {
