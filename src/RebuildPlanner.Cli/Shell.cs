@@ -19,7 +19,8 @@ public static class Shell
                 terminal.Error.WriteLine($"rebuild: {error.Message}");
             }
 
-            terminal.Error.WriteLine("See rebuild --help, or rebuild results --help.");
+            Command command = parsed.CommandResult.Command;
+            terminal.Error.WriteLine(command is RootCommand ? "See rebuild --help." : $"See rebuild {command.Name} --help.");
             return ExitCode.Wrong;
         }
 

@@ -146,7 +146,7 @@ public static class VolumeBars
         string.Join(" ", results.Cylinders.Select(cylinder =>
             $"{words.Of(Phrase.Cylinder)} {cylinder.Cylinder}: "
             + string.Join(", ", _parts.Select(part => $"{words.Of(part.Name)} {text.Value(part.Of(cylinder))}"))
-            + $"; {words.Of(Phrase.Clearance, ("unit", unit))} {text.Value(cylinder.ClearanceVolume)}."));
+            + $"; {words.Of(Phrase.VolumesTotal, ("value", text.Value(cylinder.ClearanceVolume)), ("unit", unit))}."));
 
     // A bar has room for a short name only; the tables say it whole.
     private static string Short(string label) => label.Length <= 8 ? label : label[..7] + "…";

@@ -9,7 +9,7 @@ public enum Phrase
     AnswerOutside, AnswerOpen, AnswerNoLimits, AnswerMeaning, MissingHead, MissingLead, CylindersHead, CylindersLead, Cylinder,
     Ratio, From95, WorstFrom, To, Bore, Swept, Clearance, PistonToHead, Taper, OutOfRound, Trapped, Cranking, Doubt, Share,
     CrankingNote, LimitsHead, LimitsNone, LimitName, LimitOfCylinder, LimitWithin, LimitOutside, LimitOpen, LimitMissing,
-    LimitSettle, LimitNoSettle, LimitSettleCylinders, LimitsTable, All, VolumesHead, VolumesCaption, VolumesMissing, Chamber, Gasket, Deck, Crown,
+    LimitSettle, LimitNoSettle, LimitSettleCylinders, LimitsTable, All, VolumesHead, VolumesCaption, VolumesMissing, VolumesTotal, Chamber, Gasket, Deck, Crown,
     TopLand, CrossCheck, SectionHead, SectionCaption, SectionScale, SectionDetail, SectionStroke, SectionRod, SectionBore,
     SectionGap, SectionDeck, SectionGasket, SectionOpening, SectionTopLand, SectionHeadPart, SectionBlockPart, SectionPistonPart,
     SectionNoRod, SectionNoHeight, SpreadHead, SpreadName, SpreadValue, Displacement, SpreadRatio, SpreadChamber, SpreadNone,
