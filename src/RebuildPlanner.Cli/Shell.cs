@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.CommandLine.Parsing;
+using RebuildPlanner.Core.Quantities;
 
 namespace RebuildPlanner.Cli;
 
@@ -20,7 +21,9 @@ public static class Shell
             }
 
             Command command = parsed.CommandResult.Command;
-            terminal.Error.WriteLine(command is RootCommand ? "See rebuild --help." : $"See rebuild {command.Name} --help.");
+            string? near = command == root && args.Length > 0 ? NearestWord.Of(args[0], [.. root.Subcommands.Select(known => known.Name)]) : null;
+            terminal.Error.WriteLine(
+                near is not null ? $"Did you mean rebuild {near}? See rebuild --help." : command == root ? "See rebuild --help." : $"See rebuild {command.Name} --help.");
             return ExitCode.Wrong;
         }
 

@@ -90,7 +90,8 @@ public class ResultsCommandTests
     [InlineData("results", "--file", ".", ".: that is a folder; a job file is wanted.")]
     [InlineData("results", "--file", "x.json", "--stage", "as recieved", "did you mean \"as received\"?")]
     [InlineData("results", "--fill", "x.json", "--file")]
-    [InlineData("result", "results")]
+    [InlineData("result", "Did you mean rebuild results?")]
+    [InlineData("sheet", "--fill", "x.json", "See rebuild sheet --help.")]
     public void A_wrong_request_is_answered_with_what_would_be_right(params string[] words)
     {
         Screen screen = Screen.Of(words[..^1]);
