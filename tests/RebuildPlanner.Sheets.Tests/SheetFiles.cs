@@ -52,14 +52,14 @@ internal static class SheetFiles
             {
                 foreach (string axis in new[] { "thrust", "along crank" })
                 {
-                    readings.Append($$"""{ "what": "bore", "cylinder": "{{label}}", "at": "{{at}}", "axis": "{{axis}}", "value": "96.0{{odd}}{{at.Length}} mm", "stage": "as machined" },""");
+                    readings.Append(System.Globalization.CultureInfo.InvariantCulture, $$"""{ "what": "bore", "cylinder": "{{label}}", "at": "{{at}}", "axis": "{{axis}}", "value": "96.0{{odd}}{{at.Length}} mm", "stage": "as machined" },""");
                 }
             }
 
-            readings.Append($$"""{ "what": "deck", "cylinder": "{{label}}", "value": "0.1{{odd}} mm below", "stage": "as machined" },""");
+            readings.Append(System.Globalization.CultureInfo.InvariantCulture, $$"""{ "what": "deck", "cylinder": "{{label}}", "value": "0.1{{odd}} mm below", "stage": "as machined" },""");
             if (label is not ("6" or "10" or "24"))
             {
-                readings.Append($$"""{ "what": "chamber", "cylinder": "{{label}}", "value": "50.{{odd}} cc", "stage": "as machined" },""");
+                readings.Append(System.Globalization.CultureInfo.InvariantCulture, $$"""{ "what": "chamber", "cylinder": "{{label}}", "value": "50.{{odd}} cc", "stage": "as machined" },""");
             }
         }
 
