@@ -2,10 +2,10 @@ using BenchmarkDotNet.Running;
 using RebuildPlanner.Benchmarks;
 
 // Ratios are taken within one run, rival and program by turns on one machine: a time of its own says nothing on another one.
-string word = args.FirstOrDefault(arg => !arg.StartsWith('-')) ?? "both";
-if (word is not ("both" or "first-order" or "process"))
+string word = args.FirstOrDefault(arg => !arg.StartsWith('-')) ?? "all";
+if (word is not ("all" or "first-order" or "process" or "sheet"))
 {
-    Console.Error.WriteLine($"{word}: there is no such benchmark; write first-order or process, or nothing for both.");
+    Console.Error.WriteLine($"{word}: there is no such benchmark; write first-order, process or sheet, or nothing for all.");
     return 2;
 }
 
@@ -15,10 +15,15 @@ if (args.Contains("--detail"))
     return 0;
 }
 
-bool agreed = word == "process" || FirstOrderBenchmark.Run();
-if (word is "both" or "process")
+bool agreed = word is not ("all" or "first-order") || FirstOrderBenchmark.Run();
+if (word is "all" or "process")
 {
     ProcessBenchmark.Run();
+}
+
+if (word is "all" or "sheet")
+{
+    SheetBenchmark.Run();
 }
 
 return agreed ? 0 : 1;
