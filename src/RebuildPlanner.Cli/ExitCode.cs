@@ -11,4 +11,7 @@ public static class ExitCode
 
     /// <summary>The request or the data is wrong; standard error says where and what would be right.</summary>
     public const int Wrong = 2;
+
+    /// <summary>The store failed; standard error says what happened and what to do.</summary>
+    public const int StoreFailed = 3;
 }

@@ -22,7 +22,7 @@ public static class FigureCommand
     /// <summary>Makes the command.</summary>
     public static Command Make(Terminal terminal)
     {
-        Option<string> file = JobOptions.File();
+        JobSource source = new();
         Option<Stage?> stage = JobOptions.Stage();
         Option<string?> show = JobOptions.Word<string>(
             "--show", "section or volumes; else section.", "figure", [Section, Volumes], word => word is Section or Volumes ? word : null);
@@ -30,12 +30,12 @@ public static class FigureCommand
         Option<bool> svg = new("--svg") { Description = "As SVG; else what it says, in words." };
         Option<string> output = new("--out") { Description = "The file to write; else it is printed.", HelpName = "figure.svg" };
         SheetOptions options = new();
-        ExampleCommand command = new("figure", Description, Example) { file, stage, show, cylinder, svg, output };
+        ExampleCommand command = new("figure", Description, Example) { stage, show, cylinder, svg, output };
+        source.AddTo(command);
         options.AddWithoutPageTo(command);
         command.SetAction(parsed =>
         {
-            string path = parsed.GetValue(file)!;
-            if (JobInput.Read(path, terminal.Error) is not { } job || options.Of(job, parsed, terminal) is not { } input)
+            if (source.Read(parsed, terminal) is not var (job, name) || options.Of(job, parsed, terminal) is not { } input)
             {
                 return ExitCode.Wrong;
             }
@@ -52,7 +52,7 @@ public static class FigureCommand
                 : Chosen(results, parsed.GetValue(cylinder)) is { } chosen ? FiguresPart.Section(input, results, chosen) : null;
             if (picture is null)
             {
-                terminal.Error.WriteLine($"{path}: too little is known at the stage {StageWords.Of(results.Stage)} to draw this. Missing:");
+                terminal.Error.WriteLine($"{name}: too little is known at the stage {StageWords.Of(results.Stage)} to draw this. Missing:");
                 JobOptions.SayMissing(results, terminal);
                 return ExitCode.Wrong;
             }

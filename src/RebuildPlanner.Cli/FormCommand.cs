@@ -18,23 +18,24 @@ public static class FormCommand
     /// <summary>Makes the command.</summary>
     public static Command Make(Terminal terminal)
     {
-        Option<string> file = JobOptions.File();
+        JobSource source = new();
         Option<Stage?> stage = JobOptions.Stage();
         Option<bool> left = new("--left") { Description = "Only what has not been read at the stage yet." };
         Option<string> output = PdfOutput.Option();
         SheetOptions options = new();
-        ExampleCommand command = new("form", Description, Example) { file, stage, left, output };
+        ExampleCommand command = new("form", Description, Example) { stage, left, output };
+        source.AddTo(command);
         options.AddTo(command);
         command.SetAction(parsed =>
         {
-            if (JobInput.Read(parsed.GetValue(file)!, terminal.Error) is not { } job || options.Of(job, parsed, terminal) is not { } input)
+            if (source.Read(parsed, terminal) is not var (job, _) || options.Of(job, parsed, terminal) is not { } input)
             {
                 return ExitCode.Wrong;
             }
 
             Stage at = parsed.GetValue(stage) ?? LastStage.Of(job);
             IReadOnlyList<RoundPlace> places = parsed.GetValue(left) ? Round.Left(job, at) : Round.Of(job.Engine);
-            return PdfOutput.Write(MeasuringForm.Of(input, at, places), parsed.GetValue(output)!, terminal) ? ExitCode.Done : ExitCode.Wrong;
+            return PdfOutput.Write(MeasuringForm.Of(input, at, places), parsed.GetValue(output)!, terminal) is null ? ExitCode.Wrong : ExitCode.Done;
         });
         return command;
     }

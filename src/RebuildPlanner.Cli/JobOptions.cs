@@ -8,9 +8,6 @@ namespace RebuildPlanner.Cli;
 /// <summary>The options by which every command says which job and which stage it is about.</summary>
 internal static class JobOptions
 {
-    /// <summary>The job file.</summary>
-    public static Option<string> File() => new("--file") { Description = "The job file, or a sheet with one inside.", HelpName = "job.json", Required = true };
-
     /// <summary>The stage.</summary>
     public static Option<Stage?> Stage()
     {

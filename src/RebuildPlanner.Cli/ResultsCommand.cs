@@ -22,26 +22,22 @@ public static class ResultsCommand
     /// <summary>Makes the command.</summary>
     public static Command Make(Terminal terminal)
     {
-        Option<string> file = JobOptions.File();
+        JobSource source = new();
         Option<Stage?> stage = JobOptions.Stage();
         Option<bool> json = new("--json") { Description = "As JSON: units cm3, mm, kPa and 1, full precision." };
         Option<bool> inch = new("--inch") { Description = "Print in inch, cubic inch and psi." };
-        ExampleCommand command = new("results", Description, Example) { file, stage, json, inch };
-        command.SetAction(parsed => Run(
-            terminal, parsed.GetValue(file)!, parsed.GetValue(stage), parsed.GetValue(json),
-            parsed.GetValue(inch) ? UnitSystem.Inch : UnitSystem.Metric));
+        ExampleCommand command = new("results", Description, Example) { stage, json, inch };
+        source.AddTo(command);
+        command.SetAction(parsed => source.Read(parsed, terminal) is { } read
+            ? Run(terminal, read.Job, read.Name, parsed.GetValue(stage), parsed.GetValue(json), parsed.GetValue(inch) ? UnitSystem.Inch : UnitSystem.Metric)
+            : ExitCode.Wrong);
         return command;
     }
 
-    private static int Run(Terminal terminal, string path, Stage? asked, bool asJson, UnitSystem system)
+    private static int Run(Terminal terminal, Job job, string name, Stage? asked, bool asJson, UnitSystem system)
     {
-        if (JobInput.Read(path, terminal.Error) is not { } job)
-        {
-            return ExitCode.Wrong;
-        }
-
         Results results = StageResults.Of(job, asked ?? LastStage.Of(job));
-        if (JobOptions.IsEmpty(path, results, terminal))
+        if (JobOptions.IsEmpty(name, results, terminal))
         {
             return ExitCode.Wrong;
         }

@@ -1,6 +1,7 @@
 using System.CommandLine;
 using System.CommandLine.Parsing;
 using RebuildPlanner.Core.Quantities;
+using RebuildPlanner.Store;
 
 namespace RebuildPlanner.Cli;
 
@@ -13,6 +14,12 @@ public static class Shell
     {
         RootCommand root = Commands(terminal);
         ParseResult parsed = root.Parse(args, new ParserConfiguration { ResponseFileTokenReplacer = null });
+        if (StrangeOption(args, parsed) is { } strange)
+        {
+            terminal.Error.WriteLine($"rebuild: {strange}");
+            return ExitCode.Wrong;
+        }
+
         if (parsed.Errors.Count > 0)
         {
             foreach (ParseError error in parsed.Errors)
@@ -27,23 +34,70 @@ public static class Shell
             return ExitCode.Wrong;
         }
 
-        return parsed.Invoke(new InvocationConfiguration
+        try
         {
-            Output = terminal.Output,
-            Error = terminal.Error,
-            EnableDefaultExceptionHandler = false,
-        });
+            return parsed.Invoke(new InvocationConfiguration
+            {
+                Output = terminal.Output,
+                Error = terminal.Error,
+                EnableDefaultExceptionHandler = false,
+            });
+        }
+        catch (StoreException problem)
+        {
+            terminal.Error.WriteLine(problem.Message);
+            return ExitCode.StoreFailed;
+        }
+    }
+
+    // The library takes an option it does not know for an argument, and then says something else is wrong.
+    private static string? StrangeOption(string[] args, ParseResult parsed)
+    {
+        Command command = parsed.CommandResult.Command;
+        string[] known = [.. command.Options.Concat(parsed.RootCommandResult.Command.Options).SelectMany(option => option.Aliases.Prepend(option.Name))];
+        string? strange = args.TakeWhile(arg => arg != "--").Select(arg => arg.Split('=')[0])
+            .FirstOrDefault(arg => arg.Length > 2 && arg.StartsWith("--", StringComparison.Ordinal) && !arg.Contains(' ', StringComparison.Ordinal) && !known.Contains(arg));
+        if (strange is null)
+        {
+            return null;
+        }
+
+        string? near = NearestWord.Of(strange, known);
+        string name = command is RootCommand ? "" : $" {command.Name}";
+        return $"{strange}: there is no such option here{(near is null ? "." : $"; did you mean {near}?")} See rebuild{name} --help.";
     }
 
     private static RootCommand Commands(Terminal terminal)
     {
         RootCommand root = new("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.")
         {
+            StartCommand.Make(terminal),
+            JobsCommand.Make(terminal),
+            ShowCommand.Make(terminal),
+            SetCommand.Make(terminal),
+            MeasureCommand.Make(terminal),
+            StrikeCommand.Make(terminal),
+            HistoryCommand.Make(terminal),
+            GivenCommand.Make(terminal),
+            AssumedCommand.Make(terminal),
+            PistonCommand.Make(terminal),
+            GasketCommand.Make(terminal),
+            FitCommand.Make(terminal),
+            CutCommand.Make(terminal),
+            LimitCommand.Make(terminal),
+            TargetCommand.Make(terminal),
+            CheckCommand.Make(terminal),
+            NoteCommand.Make(terminal),
+            CloseCommand.Make(terminal),
+            GaugeCommand.Make(terminal),
             ResultsCommand.Make(terminal),
             SheetCommand.Make(terminal),
             FormCommand.Make(terminal),
             FigureCommand.Make(terminal),
             TemplatesCommand.Make(terminal),
+            ImportCommand.Make(terminal),
+            ExportCommand.Make(terminal),
+            StoreCommand.Make(terminal),
             CompletionsCommand.Make(terminal),
         };
         ExampleHelp.AddTo(root);

@@ -8,10 +8,16 @@ namespace RebuildPlanner.Cli;
 /// <param name="Error">Standard error.</param>
 /// <param name="WidthColumns">How wide the output is, columns.</param>
 /// <param name="IsScreen">True on a real terminal, where weight and colour mean something.</param>
-/// <param name="Today">The day it is.</param>
+/// <param name="Now">The time it is.</param>
 /// <param name="DataFolder">Where the user's own templates and jobs are kept, or null for nowhere.</param>
-public sealed record Terminal(TextWriter Output, TextWriter Error, int WidthColumns, bool IsScreen, DateOnly Today, string? DataFolder)
+public sealed record Terminal(TextWriter Output, TextWriter Error, int WidthColumns, bool IsScreen, Func<DateTimeOffset> Now, string? DataFolder)
 {
+    /// <summary>The day it is.</summary>
+    public DateOnly Today => DateOnly.FromDateTime(Now().LocalDateTime);
+
+    /// <summary>Standard input.</summary>
+    public TextReader Input { get; init; } = TextReader.Null;
+
     // Set, it moves the data folder; else it is where the system keeps what programs keep for a user.
     private const string DataFolderVariable = "REBUILD_PLANNER_DATA", DataFolderName = "rebuild-planner";
 
@@ -25,7 +31,10 @@ public sealed record Terminal(TextWriter Output, TextWriter Error, int WidthColu
         bool screen = !Console.IsOutputRedirected;
         return new Terminal(
             Console.Out, Console.Error, screen ? Math.Max(40, Console.WindowWidth) : UsualWidthColumns, screen,
-            DateOnly.FromDateTime(DateTime.Now), OwnDataFolder());
+            () => DateTimeOffset.Now, OwnDataFolder())
+        {
+            Input = Console.In,
+        };
     }
 
     private static string? OwnDataFolder()

@@ -72,8 +72,9 @@ public sealed class JobStore : IDisposable
     /// <summary>Changes a job: its entries are read, judged and added to while nobody else writes.</summary>
     /// <param name="number">Its number.</param>
     /// <param name="judge">From the entries there are to those to add, or faults. An entry whose key is there already, saying the same, is not added again.</param>
+    /// <param name="issued">An issued sheet to keep as it is, with the key of its entry, or null.</param>
     /// <returns>What came of it, or null where there is no such job.</returns>
-    public Change? Append(string number, Func<IReadOnlyList<Entry>, Change> judge) => Guarded(() =>
+    public Change? Append(string number, Func<IReadOnlyList<Entry>, Change> judge, (string Key, byte[] Pdf)? issued = null) => Guarded(() =>
     {
         using SqliteTransaction transaction = _connection.BeginTransaction();
         if (Id(number) is not { } id)
@@ -90,6 +91,13 @@ public sealed class JobStore : IDisposable
 
         Insert(id, change.Added);
         UpdateRow(number, [.. before, .. change.Added]);
+        if (issued is { } sheet)
+        {
+            Sql.Run(
+                _connection, "INSERT INTO issued (entry, pdf) SELECT id, @pdf FROM entry WHERE key = @key ON CONFLICT (entry) DO NOTHING",
+                ("key", sheet.Key), ("pdf", Deflated(sheet.Pdf)));
+        }
+
         transaction.Commit();
         return change;
     });
@@ -124,10 +132,6 @@ public sealed class JobStore : IDisposable
     /// <summary>The shop's gauges, each as it stands, by name.</summary>
     public IReadOnlyList<(string Name, string Body)> Gauges() => Guarded(() => Sql.Rows(
         _connection, "SELECT name, body FROM gauge WHERE id IN (SELECT max(id) FROM gauge GROUP BY name) ORDER BY name", row => (row.GetString(0), row.GetString(1))));
-
-    /// <summary>Keeps an issued sheet as it is.</summary>
-    public void KeepIssued(string key, byte[] pdf) => Guarded(() => Sql.Run(
-        _connection, "INSERT INTO issued (entry, pdf) SELECT id, @pdf FROM entry WHERE key = @key ON CONFLICT (entry) DO NOTHING", ("key", key), ("pdf", Deflated(pdf))));
 
     /// <summary>An issued sheet as it was, or null.</summary>
     public byte[]? Issued(string key) => Guarded(() => Sql.Rows(

@@ -89,7 +89,7 @@ public class ResultsCommandTests
     [InlineData("results", "--file", "no-such-file.json", "no-such-file.json: there is no such file.")]
     [InlineData("results", "--file", ".", ".: that is a folder; a job file is wanted.")]
     [InlineData("results", "--file", "x.json", "--stage", "as recieved", "did you mean \"as received\"?")]
-    [InlineData("results", "--fill", "x.json", "--file")]
+    [InlineData("results", "--fill", "x.json", "--fill: there is no such option here; did you mean --file?")]
     [InlineData("result", "Did you mean rebuild results?")]
     [InlineData("sheet", "--fill", "x.json", "See rebuild sheet --help.")]
     public void A_wrong_request_is_answered_with_what_would_be_right(params string[] words)
@@ -124,20 +124,28 @@ public class ResultsCommandTests
     public void Without_a_stage_the_last_one_recorded_is_shown() =>
         Assert.Contains("Stage: as machined", Screen.Of("results", "--file", RepositoryFiles.At("samples", "van-four.json")).Output, StringComparison.Ordinal);
 
+    public static TheoryData<string> Commands =>
+        [.. Directory.GetFiles(RepositoryFiles.At("tests", "RebuildPlanner.Cli.Tests", "Approved"), "help-*.txt").Select(path => Path.GetFileNameWithoutExtension(path)["help-".Length..]).Order(StringComparer.Ordinal)];
+
     [Theory]
-    [InlineData("root", "--help")]
-    [InlineData("results", "results", "--help")]
-    [InlineData("sheet", "sheet", "--help")]
-    [InlineData("form", "form", "--help")]
-    [InlineData("figure", "figure", "--help")]
-    [InlineData("templates", "templates", "--help")]
-    [InlineData("completions", "completions", "--help")]
-    public void Help_reads_as_approved(string name, params string[] args)
+    [MemberData(nameof(Commands))]
+    public void Help_reads_as_approved(string command)
     {
-        Screen screen = Screen.Of(args);
+        Screen screen = Screen.Of([.. command == "root" ? Array.Empty<string>() : [command], "--help"]);
 
         Assert.Equal(0, screen.ExitCode);
-        Assert.Equal(RepositoryFiles.Text("tests", "RebuildPlanner.Cli.Tests", "Approved", $"help-{name}.txt"), TrimEnds(screen.Output));
+        Assert.Equal(RepositoryFiles.Text("tests", "RebuildPlanner.Cli.Tests", "Approved", $"help-{command}.txt"), TrimEnds(screen.Output));
+    }
+
+    // A command's file is named after it, so that the folder says which there are.
+    [Fact]
+    public void Every_command_has_an_approved_help_with_an_example()
+    {
+        string[] files = [.. Directory.GetFiles(RepositoryFiles.At("src", "RebuildPlanner.Cli"), "*Command.cs").Select(path => Path.GetFileNameWithoutExtension(path)[..^"Command".Length].ToLowerInvariant())];
+        string[] approved = [.. Commands.Select(command => (string)command).Where(command => command != "root")];
+
+        Assert.Equal(approved, files.Except(["entry"]).Order(StringComparer.Ordinal)); // what several commands share is no command
+        Assert.All(approved, command => Assert.Contains($"rebuild {command}", Screen.Of(command, "--help").Output.Split("Example")[1], StringComparison.Ordinal));
     }
 
     [Theory]

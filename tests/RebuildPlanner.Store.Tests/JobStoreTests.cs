@@ -60,8 +60,7 @@ public sealed class JobStoreTests : IDisposable
         {
             store.Start(StoreFiles.Small());
             store.AddGauge("dial", new Entry("g", EntryKind.Gauge, """{"id":"dial","kind":"dial gauge"}""", StoreFiles.When));
-            store.Append("2026-001", StoreFiles.Add(new Entry("s", EntryKind.Sheet, "{}", StoreFiles.When)));
-            store.KeepIssued("s", [1, 2, 3]);
+            store.Append("2026-001", StoreFiles.Add(new Entry("s", EntryKind.Sheet, "{}", StoreFiles.When)), ("s", [1, 2, 3]));
         }
 
         using SqliteConnection anyone = new($"Data Source={_files.Store};Pooling=False");
@@ -151,10 +150,7 @@ public sealed class JobStoreTests : IDisposable
         byte[] pdf = [.. Enumerable.Range(0, 5000).Select(number => (byte)(number % 7))];
         using JobStore store = _files.Open();
         store.Start(StoreFiles.Small());
-        store.Append("2026-001", StoreFiles.Add(new Entry("s", EntryKind.Sheet, "{}", StoreFiles.When)));
-
-        store.KeepIssued("s", pdf);
-        store.KeepIssued("s", [9]); // the same sheet written again changes nothing
+        store.Append("2026-001", StoreFiles.Add(new Entry("s", EntryKind.Sheet, "{}", StoreFiles.When)), ("s", pdf));
 
         Assert.Equal(pdf, store.Issued("s"));
         Assert.Null(store.Issued("other"));

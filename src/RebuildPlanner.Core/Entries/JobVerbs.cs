@@ -22,6 +22,9 @@ public static class JobVerbs
         return (job, [.. faults.Select(fault => Told(fault, places, added))]);
     }
 
+    /// <summary>The reasons of struck entries, by key.</summary>
+    public static Dictionary<string, string> Struck(IReadOnlyList<Entry> entries) => JobFold.Strikes(entries);
+
     /// <summary>The body of a strike.</summary>
     /// <param name="entries">The job's entries.</param>
     /// <param name="key">The key of the entry to strike.</param>

@@ -90,12 +90,26 @@ public sealed class StageFigures
     public LinearFigure? Spread(Output output)
     {
         LinearFigure?[] known = [.. Cylinders.Select(cylinder => Of(output, cylinder))];
-        if (known.Length < 2 || Array.Exists(known, figure => figure is null))
+        return Array.Exists(known, figure => figure is null) ? null : Spread(output, known);
+    }
+
+    /// <summary>The spread of those cylinders whose output is known already, as it is told while the others are still being read; null for fewer than two.</summary>
+    public LinearFigure? SpreadSoFar(Output output, out int count)
+    {
+        LinearFigure?[] known = [.. Cylinders.Select(cylinder => Of(output, cylinder))];
+        count = known.Count(figure => figure is not null);
+        return Spread(output, known);
+    }
+
+    private LinearFigure? Spread(Output output, LinearFigure?[] known)
+    {
+        int[] cylinders = [.. Cylinders.Where(cylinder => known[cylinder] is not null)];
+        if (cylinders.Length < 2)
         {
             return null;
         }
 
-        (int Up, int Down)[] pairs = [.. Cylinders.SelectMany(up => Cylinders.Where(down => down != up).Select(down => (up, down)))];
+        (int Up, int Down)[] pairs = [.. cylinders.SelectMany(up => cylinders.Where(down => down != up).Select(down => (up, down)))];
         (int up, int down) = pairs.MaxBy(pair => (known[pair.Up]!.Value - known[pair.Down]!.Value, DifferenceVariance(output, pair.Up, pair.Down)));
         WorstLimits worst = pairs
             .Select(pair => _worst.Difference(output, pair.Up, pair.Down))

@@ -1,0 +1,99 @@
+using System.Globalization;
+using System.Text.Json;
+using System.Text.Json.Nodes;
+using RebuildPlanner.Core.Cylinders;
+using RebuildPlanner.Core.Entries;
+using RebuildPlanner.Core.Jobs;
+using RebuildPlanner.Core.Measuring;
+using RebuildPlanner.Core.Quantities;
+using RebuildPlanner.Store;
+
+namespace RebuildPlanner.Cli;
+
+/// <summary>Writes readings, with the shop's gauge they name, and says how the job stands after them.</summary>
+internal static class Readings
+{
+    private static readonly JsonSerializerOptions _relaxed = new() { Encoder = System.Text.Encodings.Web.JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
+
+    /// <summary>Writes one reading; the job's entries with it, or null after the reason has been written.</summary>
+    public static IReadOnlyList<Entry>? Write(JobStore store, string number, Entry reading, Terminal terminal) =>
+        Write(store, number, [reading], "measure", terminal);
+
+    /// <summary>Writes readings, all or none.</summary>
+    public static IReadOnlyList<Entry>? Write(JobStore store, string number, IReadOnlyList<Entry> readings, string what, Terminal terminal)
+    {
+        Entry[] named = [.. readings.Select(WithId)];
+        return WriteOptions.Write(store, number, before => ([.. GaugesOf(store, before, named, terminal), .. named], null), what, terminal);
+    }
+
+    /// <summary>Says what was written last, the spread of chambers so far, and what is left.</summary>
+    public static int Say(IReadOnlyList<Entry> entries, string number, Terminal terminal)
+    {
+        Job job = JobSource.Folded(number, entries);
+        Reading last = job.Readings[^1];
+        terminal.Output.WriteLine(EntryLine.Of(entries[^1]));
+        if (last is { What: What.Chamber, Stage: { } stage } && ChamberSpread(job, stage) is { } spread)
+        {
+            terminal.Output.WriteLine(spread);
+        }
+
+        if (last.Stage is { } at)
+        {
+            RoundPlace[] left = [.. Round.Left(job, at).Where(place => place.ForRatio)];
+            terminal.Output.WriteLine(left.Length == 0
+                ? $"Everything that ratio and gap rest on is read at the stage {StageWords.Of(at)}."
+                : string.Create(CultureInfo.InvariantCulture, $"{left.Length} places left for ratio and gap; next: {PlaceWords.Of(left[0])}"));
+        }
+
+        return ExitCode.Done;
+    }
+
+    /// <summary>The spread of the chambers read so far, or null for fewer than two.</summary>
+    public static string? ChamberSpread(Job job, Stage stage)
+    {
+        StageModel model = new(job, stage);
+        StageFigures figures = new(model);
+        if (figures.SpreadSoFar(Output.Chamber, out int known) is not { } spread)
+        {
+            return null;
+        }
+
+        ResultQuantity quantity = figures.Quantity(spread, QuantityKind.Volume, neverNegative: true);
+        ResultsText text = new(new Results(job.Number, stage), UnitSystem.Metric);
+        return string.Create(
+            CultureInfo.InvariantCulture,
+            $"chambers: {known} of {job.Engine.Cylinders} read, spread {text.Value(quantity)} {text.Unit(QuantityKind.Volume)} (95 % from {text.End(quantity, q => q.Low)} to {text.End(quantity, q => q.High)})");
+    }
+
+    // A reading without an id could not be told from another when the job comes back from elsewhere.
+    private static Entry WithId(Entry reading)
+    {
+        JsonObject body = JsonNode.Parse(reading.Body)!.AsObject();
+        return body.ContainsKey("id") ? reading : reading with { Body = new JsonObject([new("id", reading.Key), .. body.Select(field => new KeyValuePair<string, JsonNode?>(field.Key, field.Value?.DeepClone()))]).ToJsonString(_relaxed) };
+    }
+
+    /// <summary>The shop's gauges that readings name and the job has no copy of yet.</summary>
+    public static List<Entry> GaugesOf(JobStore store, IReadOnlyList<Entry> before, IReadOnlyList<Entry> readings, Terminal terminal)
+    {
+        HashSet<string> known = [.. before.Where(entry => entry.Kind == EntryKind.Gauge).Select(entry => Field(entry.Body, "id")).OfType<string>()];
+        List<Entry> copied = [];
+        foreach (string name in readings.Select(reading => Field(reading.Body, "gauge")).OfType<string>().Distinct())
+        {
+            foreach (string body in known.Contains(name) ? [] : GaugeCommand.WithSetters(store, name))
+            {
+                if (known.Add(Field(body, "id")!))
+                {
+                    copied.Add(new Entry(WriteOptions.NewKey(terminal), EntryKind.Gauge, body, terminal.Now()));
+                }
+            }
+        }
+
+        return copied;
+    }
+
+    private static string? Field(string body, string name)
+    {
+        using JsonDocument document = JsonDocument.Parse(body);
+        return document.RootElement.TryGetProperty(name, out JsonElement value) && value.ValueKind == JsonValueKind.String ? value.GetString() : null;
+    }
+}

@@ -1,0 +1,104 @@
+using System.CommandLine;
+using RebuildPlanner.Core.Entries;
+using RebuildPlanner.Core.JobFile;
+using RebuildPlanner.Store;
+
+namespace RebuildPlanner.Cli;
+
+/// <summary>The options of everything that writes into a job: which job, whose hand, and a key that makes a repeat harmless.</summary>
+internal sealed class WriteOptions
+{
+    private readonly Argument<string> _number = new("job") { Description = "The job's number." };
+    private readonly Option<string> _by = new("--by") { Description = "Who writes this.", HelpName = "name" };
+    private readonly Option<string> _key = new("--key") { Description = "A key of your own: written again under it, nothing is added twice.", HelpName = "key" };
+    private readonly StoreOption _store = new();
+
+    /// <summary>Adds them to a command, the job's number as its first argument.</summary>
+    public void AddTo(Command command)
+    {
+        command.Arguments.Insert(0, _number);
+        command.Options.Add(_by);
+        command.Options.Add(_key);
+        _store.AddTo(command);
+    }
+
+    /// <summary>The job's number.</summary>
+    public string Number(ParseResult parsed) => parsed.GetValue(_number)!;
+
+    /// <summary>The store, opened.</summary>
+    public JobStore Open(ParseResult parsed, Terminal terminal) => _store.Open(parsed, terminal);
+
+    /// <summary>A new entry of these options.</summary>
+    public Entry Entry(EntryKind kind, string body, ParseResult parsed, Terminal terminal) =>
+        new(parsed.GetValue(_key) ?? NewKey(terminal), kind, body, terminal.Now(), parsed.GetValue(_by));
+
+    /// <summary>A key of its own; those written later come later in order.</summary>
+    /// <remarks>The millisecond in ten letters and four by lot, in an alphabet without l, o, u and z: short enough to be typed, and to be told apart by eye.</remarks>
+    public static string NewKey(Terminal terminal)
+    {
+        const string Letters = "0123456789abcdefghijkmnpqrstvwxy";
+        const int TimeLetters = 10, Base = 32;
+        Span<char> key = stackalloc char[TimeLetters + 4];
+        long milliseconds = terminal.Now().ToUnixTimeMilliseconds();
+        for (int letter = TimeLetters - 1; letter >= 0; letter--)
+        {
+            key[letter] = Letters[(int)(milliseconds % Base)];
+            milliseconds /= Base;
+        }
+
+        System.Security.Cryptography.RandomNumberGenerator.GetItems(Letters, key[TimeLetters..]);
+        return key.ToString();
+    }
+
+    /// <summary>Writes entries into a job.</summary>
+    /// <param name="entries">The new ones; the last is the one that faults are told of.</param>
+    /// <param name="what">What to call it in messages.</param>
+    /// <param name="issued">An issued sheet to keep, with its entry's key, or null.</param>
+    /// <returns>The job's entries with them, or null after the reason has been written.</returns>
+    public static IReadOnlyList<Entry>? Write(
+        JobStore store, string number, IReadOnlyList<Entry> entries, string what, Terminal terminal, (string Key, byte[] Pdf)? issued = null) =>
+        Write(store, number, _ => (entries, null), what, terminal, issued);
+
+    /// <summary>Writes what is made of the entries that are there, while nobody else writes.</summary>
+    public static IReadOnlyList<Entry>? Write(
+        JobStore store, string number, Func<IReadOnlyList<Entry>, (IReadOnlyList<Entry> Added, string? Problem)> make, string what, Terminal terminal,
+        (string Key, byte[] Pdf)? issued = null)
+    {
+        string? refused = null;
+        IReadOnlyList<Entry> all = [];
+        JobStore.Change? change = store.Append(number, before =>
+        {
+            (IReadOnlyList<Entry> made, string? problem) = make(before);
+            Entry[] added = [.. made.Where(entry => !before.Any(known => Same(known, entry)))];
+            refused = problem ?? Clash(before, added);
+            all = [.. before, .. added];
+            IReadOnlyList<Fault> faults = refused is null && added.Length > 0 ? JobVerbs.Add(before, added).Faults : [];
+            return new JobStore.Change(refused is null ? added : [], faults);
+        }, issued);
+        if (change is null)
+        {
+            terminal.Error.WriteLine(JobSource.NotThere(store, number));
+            return null;
+        }
+
+        foreach (Fault fault in change.Faults)
+        {
+            string place = fault.Path.Length == 0 ? "" : $"{fault.Path}: ";
+            terminal.Error.WriteLine($"{what}: {place}{(fault.Value is null ? "" : $"\"{fault.Value}\": ")}{fault.Message}");
+        }
+
+        if (refused is not null)
+        {
+            terminal.Error.WriteLine($"{what}: {refused}.");
+        }
+
+        return change.Faults.Count > 0 || refused is not null ? null : all;
+    }
+
+    private static bool Same(Entry known, Entry entry) => known.Key == entry.Key && known.Kind == entry.Kind && known.Body == entry.Body;
+
+    private static string? Clash(IReadOnlyList<Entry> before, IReadOnlyList<Entry> added) =>
+        before.FirstOrDefault(known => added.Any(entry => entry.Key == known.Key)) is { } other
+            ? $"another entry was written under the key {other.Key} already; take a new key"
+            : null;
+}
