@@ -25,7 +25,7 @@ public static class CloseCommand
             using JobStore store = write.Open(parsed, terminal);
             bool closed = !parsed.GetValue(open);
             string number = write.Number(parsed);
-            IReadOnlyList<Entry>? written = WriteOptions.Write(
+            WrittenJob? written = WriteOptions.Write(
                 store, number,
                 before => JobFold.IsClosed(before) == closed
                     ? ([], $"job {number} is {(closed ? "closed" : "open")} already")

@@ -50,7 +50,7 @@ public static class ImportCommand
     private static int Merge(JobStore store, Job job, Entry[] entries, string path, Terminal terminal)
     {
         int added = 0, left = 0;
-        IReadOnlyList<Entry>? written = WriteOptions.Write(
+        WrittenJob? written = WriteOptions.Write(
             store, job.Number,
             before =>
             {

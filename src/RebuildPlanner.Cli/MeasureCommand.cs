@@ -35,7 +35,7 @@ public static class MeasureCommand
             if (fields.IsOne(parsed))
             {
                 return fields.Body(parsed, terminal) is { } body && Readings.Write(store, number, write.Entry(EntryKind.Reading, body, parsed, terminal), terminal) is { } written
-                    ? Readings.Say(written, number, terminal)
+                    ? Readings.Say(written, terminal)
                     : ExitCode.Wrong;
             }
 

@@ -30,7 +30,7 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
     /// <summary>Asks until nothing is left, or the one at the bench stops.</summary>
     public int Run()
     {
-        Load(store.Entries(number)!);
+        Load(new WrittenJob(number, store.Entries(number)!, null));
         IReadOnlyList<RoundPlace> round = Round.Of(_job.Engine);
         HashSet<RoundPlace> skipped = [];
         Say($"Job {number}, {StageWords.Of(stage)}. Enter leaves a place for later; ? shows what else can be typed.");
@@ -166,13 +166,13 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
 
         body["stage"] = StageWords.Of(stage);
         Entry reading = New(EntryKind.Reading, body.ToJsonString(_relaxed));
-        if (Readings.Write(store, number, reading, terminal) is not { } entries)
+        if (Readings.Write(store, number, reading, terminal) is not { } written)
         {
             return false;
         }
 
         _written++;
-        Load(entries);
+        Load(written);
         if (before.Length > 0)
         {
             AskStrike(before[^1]);
@@ -196,7 +196,7 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
             return;
         }
 
-        IReadOnlyList<Entry>? written = WriteOptions.Write(
+        WrittenJob? written = WriteOptions.Write(
             store, number,
             known => JobVerbs.Strike(known, struck.Key, reason, out string? problem) is { } body ? ([New(EntryKind.Strike, body)], null) : ([], problem), "strike", terminal);
         if (written is not null)
@@ -290,7 +290,7 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
 
     private Entry New(EntryKind kind, string body) => new(WriteOptions.NewKey(terminal), kind, body, terminal.Now(), by);
 
-    private void Load(IReadOnlyList<Entry> entries) => (_entries, _job) = (entries, JobSource.Folded(number, entries));
+    private void Load(WrittenJob written) => (_entries, _job) = (written.Entries, written.Job);
 
     private string? Prompt(string text)
     {

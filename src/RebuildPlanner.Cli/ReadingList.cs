@@ -91,7 +91,7 @@ internal static class ReadingList
         }
 
         terminal.Output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{readings.Count} readings"));
-        return Readings.Say(written, number, terminal);
+        return Readings.Say(written, terminal);
     }
 
     // Judged row by row first, so that every fault is told with the line it stands in.

@@ -15,23 +15,23 @@ internal static class Readings
 {
     private static readonly JsonSerializerOptions _relaxed = new() { Encoder = System.Text.Encodings.Web.JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
 
-    /// <summary>Writes one reading; the job's entries with it, or null after the reason has been written.</summary>
-    public static IReadOnlyList<Entry>? Write(JobStore store, string number, Entry reading, Terminal terminal) =>
+    /// <summary>Writes one reading; the job with it, or null after the reason has been written.</summary>
+    public static WrittenJob? Write(JobStore store, string number, Entry reading, Terminal terminal) =>
         Write(store, number, [reading], "measure", terminal);
 
     /// <summary>Writes readings, all or none.</summary>
-    public static IReadOnlyList<Entry>? Write(JobStore store, string number, IReadOnlyList<Entry> readings, string what, Terminal terminal)
+    public static WrittenJob? Write(JobStore store, string number, IReadOnlyList<Entry> readings, string what, Terminal terminal)
     {
         Entry[] named = [.. readings.Select(WithId)];
         return WriteOptions.Write(store, number, before => ([.. GaugesOf(store, before, named, terminal), .. named], null), what, terminal);
     }
 
     /// <summary>Says what was written last, the spread of chambers so far, and what is left.</summary>
-    public static int Say(IReadOnlyList<Entry> entries, string number, Terminal terminal)
+    public static int Say(WrittenJob written, Terminal terminal)
     {
-        Job job = JobSource.Folded(number, entries);
+        Job job = written.Job;
         Reading last = job.Readings[^1];
-        terminal.Output.WriteLine(EntryLine.Of(entries[^1]));
+        terminal.Output.WriteLine(EntryLine.Of(written.Entries[^1]));
         if (last is { What: What.Chamber, Stage: { } stage } && ChamberSpread(job, stage) is { } spread)
         {
             terminal.Output.WriteLine(spread);

@@ -28,7 +28,7 @@ public static class SetCommand
         {
             using JobStore store = write.Open(parsed, terminal);
             string field = parsed.GetValue(path)!;
-            IReadOnlyList<Entry>? written = WriteOptions.Write(
+            WrittenJob? written = WriteOptions.Write(
                 store, write.Number(parsed),
                 before => field == "job.number"
                     ? ([], "a job keeps its number; export it and import it under another")

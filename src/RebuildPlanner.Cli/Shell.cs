@@ -12,7 +12,7 @@ public static class Shell
     /// <returns>The exit code, see <see cref="ExitCode"/>.</returns>
     public static int Run(string[] args, Terminal terminal)
     {
-        RootCommand root = Commands(terminal);
+        RootCommand root = Commands(terminal, args);
         ParseResult parsed = root.Parse(args, new ParserConfiguration { ResponseFileTokenReplacer = null });
         if (StrangeOption(args, parsed) is { } strange)
         {
@@ -67,39 +67,51 @@ public static class Shell
         return $"{strange}: there is no such option here{(near is null ? "." : $"; did you mean {near}?")} See rebuild{name} --help.";
     }
 
-    private static RootCommand Commands(Terminal terminal)
+    // Every command by its word; only the one asked for is made, unless help or completion wants them all.
+    private static readonly (string Word, Func<Terminal, Command> Make)[] _commands =
+    [
+        ("start", StartCommand.Make),
+        ("jobs", JobsCommand.Make),
+        ("show", ShowCommand.Make),
+        ("set", SetCommand.Make),
+        ("measure", MeasureCommand.Make),
+        ("strike", StrikeCommand.Make),
+        ("history", HistoryCommand.Make),
+        ("given", GivenCommand.Make),
+        ("assumed", AssumedCommand.Make),
+        ("piston", PistonCommand.Make),
+        ("gasket", GasketCommand.Make),
+        ("fit", FitCommand.Make),
+        ("cut", CutCommand.Make),
+        ("limit", LimitCommand.Make),
+        ("target", TargetCommand.Make),
+        ("check", CheckCommand.Make),
+        ("note", NoteCommand.Make),
+        ("close", CloseCommand.Make),
+        ("gauge", GaugeCommand.Make),
+        ("results", ResultsCommand.Make),
+        ("sheet", SheetCommand.Make),
+        ("form", FormCommand.Make),
+        ("figure", FigureCommand.Make),
+        ("templates", TemplatesCommand.Make),
+        ("import", ImportCommand.Make),
+        ("export", ExportCommand.Make),
+        ("store", StoreCommand.Make),
+        ("completions", CompletionsCommand.Make),
+    ];
+
+    private static RootCommand Commands(Terminal terminal, string[] args)
     {
-        RootCommand root = new("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.")
+        RootCommand root = new("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.");
+        bool one = args.Length > 0 && Array.Exists(_commands, command => command.Word == args[0]);
+        foreach ((string word, Func<Terminal, Command> make) in _commands)
         {
-            StartCommand.Make(terminal),
-            JobsCommand.Make(terminal),
-            ShowCommand.Make(terminal),
-            SetCommand.Make(terminal),
-            MeasureCommand.Make(terminal),
-            StrikeCommand.Make(terminal),
-            HistoryCommand.Make(terminal),
-            GivenCommand.Make(terminal),
-            AssumedCommand.Make(terminal),
-            PistonCommand.Make(terminal),
-            GasketCommand.Make(terminal),
-            FitCommand.Make(terminal),
-            CutCommand.Make(terminal),
-            LimitCommand.Make(terminal),
-            TargetCommand.Make(terminal),
-            CheckCommand.Make(terminal),
-            NoteCommand.Make(terminal),
-            CloseCommand.Make(terminal),
-            GaugeCommand.Make(terminal),
-            ResultsCommand.Make(terminal),
-            SheetCommand.Make(terminal),
-            FormCommand.Make(terminal),
-            FigureCommand.Make(terminal),
-            TemplatesCommand.Make(terminal),
-            ImportCommand.Make(terminal),
-            ExportCommand.Make(terminal),
-            StoreCommand.Make(terminal),
-            CompletionsCommand.Make(terminal),
-        };
+            if (!one || word == args[0])
+            {
+                root.Subcommands.Add(make(terminal));
+            }
+        }
+
         ExampleHelp.AddTo(root);
         return root;
     }

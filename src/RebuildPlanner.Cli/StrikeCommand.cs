@@ -27,7 +27,7 @@ public static class StrikeCommand
             using JobStore store = write.Open(parsed, terminal);
             string number = write.Number(parsed), start = parsed.GetValue(key)!;
             Entry? struck = null;
-            IReadOnlyList<Entry>? written = WriteOptions.Write(
+            WrittenJob? written = WriteOptions.Write(
                 store, number,
                 before =>
                 {

@@ -1,6 +1,7 @@
 using System.CommandLine;
 using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Core.JobFile;
+using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Store;
 
 namespace RebuildPlanner.Cli;
@@ -54,13 +55,13 @@ internal sealed class WriteOptions
     /// <param name="entries">The new ones; the last is the one that faults are told of.</param>
     /// <param name="what">What to call it in messages.</param>
     /// <param name="issued">An issued sheet to keep, with its entry's key, or null.</param>
-    /// <returns>The job's entries with them, or null after the reason has been written.</returns>
-    public static IReadOnlyList<Entry>? Write(
+    /// <returns>The job with them, or null after the reason has been written.</returns>
+    public static WrittenJob? Write(
         JobStore store, string number, IReadOnlyList<Entry> entries, string what, Terminal terminal, (string Key, byte[] Pdf)? issued = null) =>
         Write(store, number, _ => (entries, null), what, terminal, issued);
 
     /// <summary>Writes what is made of the entries that are there, while nobody else writes.</summary>
-    public static IReadOnlyList<Entry>? Write(
+    public static WrittenJob? Write(
         JobStore store, string number, Func<IReadOnlyList<Entry>, (IReadOnlyList<Entry> Added, string? Problem)> make, string what, Terminal terminal,
         (string Key, byte[] Pdf)? issued = null)
     {
@@ -72,8 +73,8 @@ internal sealed class WriteOptions
             Entry[] added = [.. made.Where(entry => !before.Any(known => Same(known, entry)))];
             refused = problem ?? Clash(before, added);
             all = [.. before, .. added];
-            IReadOnlyList<Fault> faults = refused is null && added.Length > 0 ? JobVerbs.Add(before, added).Faults : [];
-            return new JobStore.Change(refused is null ? added : [], faults);
+            (Job? job, IReadOnlyList<Fault> faults) = refused is null && added.Length > 0 ? JobVerbs.Add(before, added) : (null, []);
+            return new JobStore.Change(refused is null ? added : [], faults, job);
         }, issued);
         if (change is null)
         {
@@ -92,7 +93,7 @@ internal sealed class WriteOptions
             terminal.Error.WriteLine($"{what}: {refused}.");
         }
 
-        return change.Faults.Count > 0 || refused is not null ? null : all;
+        return change.Faults.Count > 0 || refused is not null ? null : new WrittenJob(number, all, change.Job);
     }
 
     private static bool Same(Entry known, Entry entry) => known.Key == entry.Key && known.Kind == entry.Kind && known.Body == entry.Body;

@@ -19,7 +19,8 @@ public sealed class JobStore : IDisposable
     /// <summary>What a change comes to: entries to add, or why not.</summary>
     /// <param name="Added">The entries; empty where nothing is to be written.</param>
     /// <param name="Faults">Why not.</param>
-    public sealed record Change(IReadOnlyList<Entry> Added, IReadOnlyList<Fault> Faults);
+    /// <param name="Job">The job with them, where the judge folded it; else it is folded here.</param>
+    public sealed record Change(IReadOnlyList<Entry> Added, IReadOnlyList<Fault> Faults, Job? Job = null);
 
     /// <summary>Opens a store, making it where there is none, and brings an older one up to date after a copy.</summary>
     /// <exception cref="StoreException">It cannot be opened, is none, is damaged or is newer than this program.</exception>
@@ -52,7 +53,7 @@ public sealed class JobStore : IDisposable
     /// <returns>False where a job of that number is there already.</returns>
     public bool Start(IReadOnlyList<Entry> entries) => Guarded(() =>
     {
-        Job job = JobFold.Of(entries).Job ?? throw new ArgumentException("The entries are no job.", nameof(entries));
+        Job job = Folded(entries);
         using SqliteTransaction transaction = _connection.BeginTransaction();
         int made = Sql.Run(
             _connection,
@@ -64,7 +65,7 @@ public sealed class JobStore : IDisposable
         }
 
         Insert(Sql.Scalar(_connection, "SELECT id FROM job WHERE number = @number", ("number", job.Number)), entries);
-        UpdateRow(job.Number, entries);
+        UpdateRow(job, entries);
         transaction.Commit();
         return true;
     });
@@ -90,7 +91,8 @@ public sealed class JobStore : IDisposable
         }
 
         Insert(id, change.Added);
-        UpdateRow(number, [.. before, .. change.Added]);
+        IReadOnlyList<Entry> all = [.. before, .. change.Added];
+        UpdateRow(change.Job ?? Folded(all), all);
         if (issued is { } sheet)
         {
             Sql.Run(
@@ -210,15 +212,16 @@ public sealed class JobStore : IDisposable
         }
     }
 
-    private void UpdateRow(string number, IReadOnlyList<Entry> entries)
+    private static Job Folded(IReadOnlyList<Entry> entries) => JobFold.Of(entries).Job ?? throw new ArgumentException("The entries are no job.", nameof(entries));
+
+    private void UpdateRow(Job job, IReadOnlyList<Entry> entries)
     {
-        Job job = JobFold.Of(entries).Job ?? throw new InvalidOperationException($"The entries of {number} are no job any more.");
         JobRow row = JobRow.Of(job, JobFold.IsClosed(entries), entries.Count, entries[^1].At);
         Sql.Run(
             _connection,
             "UPDATE job SET title = @title, customer = @customer, engine = @engine, opened = @opened, closed = @closed, entries = @entries, changed = @changed WHERE number = @number",
             ("title", row.Title), ("customer", row.Customer), ("engine", row.Engine), ("opened", row.Opened), ("closed", row.Closed), ("entries", row.Entries),
-            ("changed", Written(row.Changed)), ("number", number));
+            ("changed", Written(row.Changed)), ("number", job.Number));
     }
 
     private long? Id(string number) => Sql.Rows(_connection, "SELECT id FROM job WHERE number = @number", row => (long?)row.GetInt64(0), ("number", number)).FirstOrDefault();
