@@ -1,6 +1,8 @@
+using System.Text;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Quantities;
 using RebuildPlanner.Sheets.Drawing;
+using RebuildPlanner.Sheets.Pages;
 using RebuildPlanner.Sheets.Templates;
 
 namespace RebuildPlanner.Sheets.Figures;
@@ -8,10 +10,13 @@ namespace RebuildPlanner.Sheets.Figures;
 /// <summary>The clearance volume of each cylinder as a bar of its parts, all to one scale; parts are told apart by hatching, not colour.</summary>
 public static class VolumeBars
 {
-    private const double WidthMm = 174.0, LabelMm = 16.0, ValueMm = 17.0, HeadMm = 9.0, AxisMm = 9.0, TextPt = 8.0;
+    private const double WidthMm = 174.0, LabelMm = 18.0, ValueMm = 17.0, HeadMm = 9.0, AxisMm = 9.0, TextPt = 8.0;
 
     // A bar for one cylinder may be stout; twenty-four must leave room on the page for a caption.
     private const double MostRowMm = 9.0, MostRowsMm = 190.0;
+
+    // No letter of the figure's type is wider on average; what the dash for a clearance volume not known takes at the right edge.
+    private const double LetterMm = 1.5, DashMm = 4.0;
 
     private sealed record Part(Phrase Name, Func<CylinderResult, ResultQuantity?> Of, double? Grey, double? HatchMm, double HatchDeg);
 
@@ -122,8 +127,16 @@ public static class VolumeBars
         else
         {
             // Of a bar with a part missing, its length says nothing: that is written behind it.
-            string[] missing = [.. _parts.Where(part => part.Name != Phrase.TopLand && part.Of(cylinder) is null).Select(part => words.Of(part.Name))];
-            yield return new Label(new(x(right) + 2.0, baseMm), words.Of(Phrase.VolumesMissing, ("parts", string.Join(", ", missing))), TextPt);
+            string[] parts = [.. _parts.Where(part => part.Name != Phrase.TopLand && part.Of(cylinder) is null).Select(part => words.Of(part.Name))];
+            string missing = words.Of(Phrase.VolumesMissing, ("parts", string.Join(", ", parts)));
+            double behindMm = x(right) + 2.0, fromMm = Math.Max(LabelMm, Math.Min(behindMm, WidthMm - DashMm - (LetterMm * missing.Length)));
+            if (fromMm < behindMm)
+            {
+                // No room behind the bar: on it, with the bar left out behind the words.
+                yield return Polygon.Rectangle(fromMm - 0.5, baseMm - 2.4, WidthMm - DashMm, baseMm + 0.9, null, 1.0);
+            }
+
+            yield return new Label(new(fromMm, baseMm), missing, TextPt);
         }
 
         yield return new Label(new(WidthMm, baseMm), text.Value(cylinder.ClearanceVolume), TextPt, Anchor.End);
@@ -148,8 +161,13 @@ public static class VolumeBars
             + string.Join(", ", _parts.Select(part => $"{words.Of(part.Name)} {text.Value(part.Of(cylinder))}"))
             + $"; {words.Of(Phrase.VolumesTotal, ("value", text.Value(cylinder.ClearanceVolume)), ("unit", unit))}."));
 
-    // A bar has room for a short name only; the tables say it whole.
-    private static string Short(string label) => label.Length <= 8 ? label : label[..7] + "…";
+    // Before a bar there is room for six of the widest letters; the tables say a longer name whole.
+    private static string Short(string label)
+    {
+        const int Most = 6;
+        Rune[] letters = [.. PlainText.Of(label).EnumerateRunes()];
+        return letters.Length <= Most ? label : string.Concat(letters.Take(Most - 1)) + "…";
+    }
 
     /// <summary>1, 2 or 5 times a power of ten, not below the least step wanted.</summary>
     private static double Step(double least)

@@ -110,6 +110,51 @@ public class FigureTests
         Assert.Contains(bars.Shapes.OfType<Label>(), label => label.Text == "chamber missing");
     }
 
+    // Where every part known takes volume away, zero stands at the right edge and nothing is behind it but the margin.
+    [Fact]
+    public void What_is_missing_is_written_inside_the_figure_where_there_is_no_room_behind_the_bar()
+    {
+        Job dome = SheetFiles.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "D" }, "engine": { "cylinders": 1 },
+              "given": [ { "what": "bore", "value": "81 mm" }, { "what": "crown", "value": "9 cc dome" } ] }
+            """);
+
+        Picture bars = VolumeBars.Draw(StageResults.Of(dome, Stage.AsReceived), UnitSystem.Metric, SheetWording.Original)!;
+
+        Label missing = Assert.Single(bars.Shapes.OfType<Label>(), label => label.Text == "chamber, gasket, deck missing");
+        Assert.InRange(missing.At.XMm, 0.0, bars.WidthMm - 39.0); // 39.0 mm wide as set
+        int words = bars.Shapes.ToList().IndexOf(missing);
+        Polygon behind = Assert.IsType<Polygon>(bars.Shapes[words - 1]); // and no hatching runs through it
+        Assert.Equal((1.0, (Pen?)null), (behind.Grey, behind.Pen));
+        Assert.True(behind.Corners.Max(corner => corner.XMm) <= bars.WidthMm);
+    }
+
+    [Fact]
+    public void A_name_too_long_for_a_bar_is_cut_between_whole_characters()
+    {
+        Results results = VanResults with { Cylinders = [VanResults.Cylinders[0] with { Cylinder = "😀😀😀😀😀😀😀" }, VanResults.Cylinders[1] with { Cylinder = "left 1" }] };
+
+        Picture bars = VolumeBars.Draw(results, UnitSystem.Metric, SheetWording.Original)!;
+
+        Assert.Equal(["😀😀😀😀😀…", "left 1"], bars.Shapes.OfType<Label>().Where(label => label.Bold).Select(label => label.Text));
+    }
+
+    // Level, it would run out of the drawing on the left, and on the right into the enlarged edge.
+    [Fact]
+    public void A_dimension_longer_than_its_line_stands_upright_from_its_lower_end_clear_of_the_witness_lines()
+    {
+        foreach ((double lineXMm, double fromXMm) in new[] { (10.0, 30.0), (30.0, 10.0) })
+        {
+            Shape[] shapes = [.. Dimension.Vertical(fromXMm, 100.0, 110.0, lineXMm, "stroke 60 mm ± 0.05 mm")];
+
+            Label figure = Assert.Single(shapes.OfType<Label>());
+            Assert.Equal((true, Anchor.Start, 110.0), (figure.Upright, figure.Anchor, figure.At.YMm));
+            double[] witness = [.. shapes.OfType<Line>().Where(line => line.From.YMm == line.To.YMm).SelectMany(line => new[] { line.From.XMm, line.To.XMm })];
+            Assert.True(lineXMm < fromXMm ? figure.At.XMm < witness.Min() : figure.At.XMm - 1.9 > witness.Max()); // upright letters stand left of their line, 1.9 mm high
+        }
+    }
+
     [Theory]
     [MemberData(nameof(Samples))]
     public void Nothing_is_drawn_outside_the_figure(string sample)
@@ -123,18 +168,9 @@ public class FigureTests
         ];
 
         Assert.All(pictures, picture => Assert.All(
-            picture.Shapes.SelectMany(Extremes),
+            picture.Shapes.SelectMany(SheetFiles.Extremes),
             spot => Assert.True(spot.XMm >= -0.01 && spot.XMm <= picture.WidthMm + 0.01 && spot.YMm >= -0.01 && spot.YMm <= picture.HeightMm + 0.01, $"{picture.Title}: {spot}")));
     }
-
-    private static IEnumerable<Spot> Extremes(Shape shape) => shape switch
-    {
-        Line line => [line.From, line.To],
-        Polygon polygon => polygon.Corners,
-        Circle circle => [new(circle.Centre.XMm - circle.RadiusMm, circle.Centre.YMm - circle.RadiusMm), new(circle.Centre.XMm + circle.RadiusMm, circle.Centre.YMm + circle.RadiusMm)],
-        Label label => [label.At],
-        _ => [],
-    };
 
     private static double[] Lengths(Picture picture, double grey, int skipLegend) =>
         [.. picture.Shapes.OfType<Polygon>().Where(box => box.Grey == grey).Skip(skipLegend).Select(box => box.Corners.Max(corner => corner.XMm) - box.Corners.Min(corner => corner.XMm))];
