@@ -143,6 +143,7 @@ public class AnyJobTests
         foreach (IReadOnlyList<string> row in table.Rows)
         {
             Assert.Equal(table.Columns.Count, row.Count);
+            Assert.True(row.Count > 1); // a row that is a name and nothing else says nothing
             Assert.All(row.Where((_, column) => column == 0 || !table.Columns[column].IsText), cell => Assert.NotEmpty(cell));
             Assert.All(row, cell => Assert.False(cell.Contains("NaN", StringComparison.Ordinal) || cell.Contains('∞', StringComparison.Ordinal), cell));
         }

@@ -16,7 +16,7 @@ public static class VolumeBars
     private const double MostRowMm = 9.0, MostRowsMm = 190.0;
 
     // No letter of the figure's type is wider on average; what the dash for a clearance volume not known takes at the right edge.
-    private const double LetterMm = 1.5, DashMm = 4.0;
+    private const double LetterMm = 1.5, DashMm = 4.0, BehindMm = 2.0, LeastBarMm = 40.0;
 
     private sealed record Part(Phrase Name, Func<CylinderResult, ResultQuantity?> Of, double? Grey, double? HatchMm, double HatchDeg);
 
@@ -32,12 +32,17 @@ public static class VolumeBars
     /// <summary>The figure, or null where no part of any cylinder is known.</summary>
     public static Picture? Draw(Results results, UnitSystem system, SheetWording words)
     {
+        if (!results.Cylinders.Any(cylinder => _parts.Any(part => part.Of(cylinder) is not null)))
+        {
+            return null;
+        }
+
         double InUnit(ResultQuantity quantity) => QuantityPrint.InUnit(quantity.Value, QuantityKind.Volume, system);
         double[] ends =
         [
             0.0, .. results.Cylinders.SelectMany(cylinder => new[]
             {
-                _parts.Sum(part => part.Of(cylinder) is { } volume ? Math.Max(0.0, InUnit(volume)) : 0.0),
+                Right(cylinder, InUnit),
                 _parts.Sum(part => part.Of(cylinder) is { } volume ? Math.Min(0.0, InUnit(volume)) : 0.0),
                 cylinder.ClearanceVolume is { } clearance ? InUnit(clearance) : 0.0,
             }),
@@ -52,7 +57,10 @@ public static class VolumeBars
         double step = Step((most - least) / 8.0);
         (least, most) = (Math.Floor(least / step) * step, Math.Ceiling(most / step) * step);
         double rowMm = Math.Min(MostRowMm, MostRowsMm / results.Cylinders.Count), rowsMm = rowMm * results.Cylinders.Count;
-        double perUnit = (WidthMm - LabelMm - ValueMm) / (most - least);
+
+        // The scale leaves room behind each bar for the words of what it lacks.
+        double perUnit = results.Cylinders.Where(cylinder => cylinder.ClearanceVolume is null).Select(cylinder => RoomMm(cylinder, words) / (Right(cylinder, InUnit) - least))
+            .Append((WidthMm - LabelMm - ValueMm) / (most - least)).Min();
         double X(double volume) => LabelMm + ((volume - least) * perUnit);
 
         List<Shape> shapes = [.. Legend(words), .. Axis(least, most, step, X, rowsMm, unit)];
@@ -127,20 +135,23 @@ public static class VolumeBars
         else
         {
             // Of a bar with a part missing, its length says nothing: that is written behind it.
-            string[] parts = [.. _parts.Where(part => part.Name != Phrase.TopLand && part.Of(cylinder) is null).Select(part => words.Of(part.Name))];
-            string missing = words.Of(Phrase.VolumesMissing, ("parts", string.Join(", ", parts)));
-            double behindMm = x(right) + 2.0, fromMm = Math.Max(LabelMm, Math.Min(behindMm, WidthMm - DashMm - (LetterMm * missing.Length)));
-            if (fromMm < behindMm)
-            {
-                // No room behind the bar: on it, with the bar left out behind the words.
-                yield return Polygon.Rectangle(fromMm - 0.5, baseMm - 2.4, WidthMm - DashMm, baseMm + 0.9, null, 1.0);
-            }
-
-            yield return new Label(new(fromMm, baseMm), missing, TextPt);
+            yield return new Label(new(x(right) + BehindMm, baseMm), Missing(cylinder, words), TextPt);
         }
 
         yield return new Label(new(WidthMm, baseMm), text.Value(cylinder.ClearanceVolume), TextPt, Anchor.End);
     }
+
+    /// <summary>Where the bar of a cylinder ends on the right, in the unit printed.</summary>
+    private static double Right(CylinderResult cylinder, Func<ResultQuantity, double> inUnit) =>
+        _parts.Sum(part => part.Of(cylinder) is { } volume ? Math.Max(0.0, inUnit(volume)) : 0.0);
+
+    /// <summary>What a bar without its clearance volume may take, mm.</summary>
+    private static double RoomMm(CylinderResult cylinder, SheetWording words) =>
+        Math.Max(LeastBarMm, WidthMm - DashMm - LabelMm - BehindMm - (LetterMm * Missing(cylinder, words).Length));
+
+    private static string Missing(CylinderResult cylinder, SheetWording words) => words.Of(
+        Phrase.VolumesMissing,
+        ("parts", string.Join(", ", _parts.Where(part => part.Name != Phrase.TopLand && part.Of(cylinder) is null).Select(part => words.Of(part.Name)))));
 
     private static IEnumerable<Shape> Box(Part part, double leftMm, double topMm, double rightMm, double bottomMm)
     {

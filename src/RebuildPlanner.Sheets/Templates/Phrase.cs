@@ -4,7 +4,7 @@ namespace RebuildPlanner.Sheets.Templates;
 #pragma warning disable CS1591 // The words in the file say what each phrase is.
 public enum Phrase
 {
-    Title, Subject, Foot, PageOf, Customer, Contact, Job, JobTitle, Opened, Engine, EngineUnnamed, Complaint, Asked,
+    Title, Subject, Foot, PageOf, Customer, Contact, Job, JobTitle, Opened, Engine, EngineUnnamed, EngineOfOne, Complaint, Asked,
     Stage, Issued, FuelRecorded, AnswerLead, AnswerSame, AnswerRange, AnswerNone, AnswerWithout, AnswerDisplacement, AnswerHeld,
     AnswerOutside, AnswerOpen, AnswerNoLimits, AnswerMeaning, MissingHead, MissingLead, CylindersHead, CylindersLead, Cylinder,
     Ratio, From95, WorstFrom, To, Bore, Swept, Clearance, PistonToHead, Taper, OutOfRound, Trapped, Cranking, Doubt, Share,

@@ -110,9 +110,9 @@ public class FigureTests
         Assert.Contains(bars.Shapes.OfType<Label>(), label => label.Text == "chamber missing");
     }
 
-    // Where every part known takes volume away, zero stands at the right edge and nothing is behind it but the margin.
+    // Every part known takes volume away here, so the bar would reach the right edge.
     [Fact]
-    public void What_is_missing_is_written_inside_the_figure_where_there_is_no_room_behind_the_bar()
+    public void What_is_missing_is_written_behind_the_bar_and_inside_the_figure()
     {
         Job dome = SheetFiles.Read(
             """
@@ -124,10 +124,49 @@ public class FigureTests
 
         Label missing = Assert.Single(bars.Shapes.OfType<Label>(), label => label.Text == "chamber, gasket, deck missing");
         Assert.InRange(missing.At.XMm, 0.0, bars.WidthMm - 39.0); // 39.0 mm wide as set
-        int words = bars.Shapes.ToList().IndexOf(missing);
-        Polygon behind = Assert.IsType<Polygon>(bars.Shapes[words - 1]); // and no hatching runs through it
-        Assert.Equal((1.0, (Pen?)null), (behind.Grey, behind.Pen));
-        Assert.True(behind.Corners.Max(corner => corner.XMm) <= bars.WidthMm);
+        double zeroXMm = Assert.Single(bars.Shapes.OfType<Line>(), line => line.Pen == Pen.Outline).From.XMm;
+        Assert.True(missing.At.XMm > zeroXMm); // and behind the bar, not on it
+    }
+
+    [Fact]
+    public void A_whole_chamber_of_which_no_part_is_known_has_no_bars()
+    {
+        Job whole = SheetFiles.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "W" }, "engine": { "cylinders": 1, "stroke": "78 mm" },
+              "given": [ { "what": "bore", "value": "81 mm" }, { "what": "whole chamber", "value": "52 cc" }, { "what": "plug hole", "value": "1 cc" } ] }
+            """);
+        Results results = StageResults.Of(whole, Stage.AsReceived);
+
+        Assert.NotNull(results.Cylinders[0].ClearanceVolume);
+        Assert.Null(VolumeBars.Draw(results, UnitSystem.Metric, SheetWording.Original));
+    }
+
+    // By these figures the crown lies 1.6 mm above the head's face, and the drawing says so rather than turn the gap about.
+    [Fact]
+    public void A_piston_that_meets_the_head_is_drawn_into_it_and_dimensioned_from_the_face_up()
+    {
+        Job meets = SheetFiles.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "M" }, "engine": { "cylinders": 1, "stroke": "78 mm" },
+              "given": [ { "what": "bore", "value": "81 mm" }, { "what": "gasket thickness", "value": "0.4 mm" }, { "what": "deck", "value": "2 mm proud" }, { "what": "gasket opening", "value": "88 mm" } ] }
+            """);
+        Results results = StageResults.Of(meets, Stage.AsReceived);
+
+        Picture section = FiguresPart.Section(SheetFiles.Input(meets), results, results.Cylinders[0])!;
+
+        Polygon gasket = Assert.Single(section.Shapes.OfType<Polygon>(), polygon => polygon.Grey == 0.25);
+        double faceYMm = gasket.Corners.Min(corner => corner.YMm), scale = (gasket.Corners.Max(corner => corner.YMm) - faceYMm) / 0.4;
+        Polygon piston = section.Shapes.OfType<Polygon>().Last(polygon => polygon is { Grey: 0.9, Pen: null });
+        Assert.Equal(faceYMm - (1.6 * scale), piston.Corners.Min(corner => corner.YMm), 1e-9);
+        Label letter = Assert.Single(section.Shapes.OfType<Label>(), label => label.Text == "C");
+        Assert.True(letter.At.YMm < faceYMm);
+        Label head = Assert.Single(section.Shapes.OfType<Label>(), label => label.Text == "head");
+        Assert.True(head.At.YMm < faceYMm - (1.6 * scale)); // the piston is not drawn over its name
+
+        // B stands in the bore, clear of the gasket however near that comes.
+        Label deck = Assert.Single(section.Shapes.OfType<Label>(), label => label.Text == "B");
+        Assert.True(deck.At.XMm < gasket.Corners.Min(corner => corner.XMm) - 5.0);
     }
 
     [Fact]
