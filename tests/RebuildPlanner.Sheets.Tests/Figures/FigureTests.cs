@@ -142,6 +142,23 @@ public class FigureTests
         Assert.Null(VolumeBars.Draw(results, UnitSystem.Metric, SheetWording.Original));
     }
 
+    // 0.68 of the bore is where the wall drawn as a stand-in ends; found by random jobs.
+    [Fact]
+    public void A_gasket_opening_wider_than_the_wall_draws_no_gasket_outside_it()
+    {
+        Job wide = SheetFiles.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "O" }, "engine": { "cylinders": 1, "stroke": "78 mm" },
+              "given": [ { "what": "bore", "value": "81 mm" }, { "what": "gasket thickness", "value": "1 mm" }, { "what": "gasket opening", "value": "320 mm" } ] }
+            """);
+        Results results = StageResults.Of(wide, Stage.AsReceived);
+
+        Picture section = FiguresPart.Section(SheetFiles.Input(wide), results, results.Cylinders[0])!;
+
+        Assert.Equal(320.0, results.Used(What.GasketOpening, "1")!.Value.Value);
+        Assert.All(section.Shapes.SelectMany(SheetFiles.Extremes), spot => Assert.InRange(spot.XMm, 0.0, section.WidthMm));
+    }
+
     // By these figures the crown lies 1.6 mm above the head's face, and the drawing says so rather than turn the gap about.
     [Fact]
     public void A_piston_that_meets_the_head_is_drawn_into_it_and_dimensioned_from_the_face_up()
