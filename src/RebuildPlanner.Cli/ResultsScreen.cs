@@ -121,9 +121,10 @@ internal static class ResultsScreen
             return;
         }
 
-        foreach (IGrouping<(string, string, double), Verdict> limit in results.Verdicts.GroupBy(verdict => (verdict.What, verdict.Limit, verdict.Level)))
+        foreach (IGrouping<int, Verdict> limit in results.Verdicts.GroupBy(verdict => verdict.Number))
         {
-            (string what, string bounds, double level) = limit.Key;
+            Verdict first = limit.First();
+            string name = string.Join(", ", ResultsText.PartsOf(first.Place).Prepend($"{first.What} {first.Limit}"));
             Table table = NewTable("cyl", "verdict", "belief", "would settle it");
             table.Columns[1].LeftAligned();
             table.Columns[3].LeftAligned();
@@ -134,7 +135,7 @@ internal static class ResultsScreen
                     ResultsText.Belief(verdict.Probability), verdict.Settle ?? "");
             }
 
-            Write(console, $"Limit: {what} {bounds} (belief wanted {ResultsText.Level(level)})", table, known: true);
+            Write(console, $"Limit: {name} (belief wanted {ResultsText.Level(first.Level)})", table, known: true);
         }
     }
 

@@ -160,6 +160,24 @@ public class ResultsCommandTests
         ["as machined", "as received", "before", "planned"],
         Screen.Of("[suggest:24]", "rebuild results --stage ").Output.Split('\n', StringSplitOptions.RemoveEmptyEntries).Where(word => !word.StartsWith('-')).Order());
 
+    [Fact]
+    public void Limits_that_read_alike_are_told_apart_by_what_they_are_set_on()
+    {
+        Screen screen = Screen.OfFile(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "H" },
+              "engine": { "cylinders": 2, "layout": "vee", "banks": [ { "label": "l", "cylinders": ["1"] }, { "label": "r", "cylinders": ["2"] } ] },
+              "given": [ { "what": "bore", "value": "84 mm ± 0.01 mm" }, { "what": "head height", "value": "118.6 mm ± 0.1 mm" } ],
+              "limits": [ { "what": "head height", "min": "118 mm", "head": "l", "stage": "as received" }, { "what": "head height", "min": "118 mm", "head": "r", "stage": "as received" },
+                { "what": "piston to valve", "min": "1 mm", "valve": "inlet", "stage": "as received" } ] }
+            """,
+            "--stage", "as received");
+
+        Assert.Equal(
+            ["head height min 118 mm, l", "head height min 118 mm, r", "piston to valve min 1 mm, inlet"],
+            screen.Output.Split('\n').Where(line => line.StartsWith("Limit: ", StringComparison.Ordinal)).Select(line => line[7..line.IndexOf(" (", StringComparison.Ordinal)]));
+    }
+
     // The library names the running program, which here is the test.
     private static string TrimEnds(string text) => string.Join('\n', text.Split('\n').Select(line => line.TrimEnd())).TrimEnd().Replace("RebuildPlanner.Cli.Tests", "rebuild", StringComparison.Ordinal) + "\n";
 }

@@ -1,8 +1,8 @@
 using System.Text;
-using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Quantities;
 using RebuildPlanner.Sheets.Build;
+using RebuildPlanner.Sheets.Drawing;
 using RebuildPlanner.Sheets.Pages;
 using RebuildPlanner.Sheets.Templates;
 using RebuildPlanner.Tests.Shared;
@@ -19,12 +19,7 @@ internal static class SheetFiles
 
     public static Job Sample(string file) => Read(RepositoryFiles.Text("samples", file));
 
-    public static Job Read(string json)
-    {
-        (Job? job, IReadOnlyList<Fault> faults) = JobFileReader.Read(Encoding.UTF8.GetBytes(json));
-        Assert.True(job is not null, string.Join("\n", faults));
-        return job!;
-    }
+    public static Job Read(string json) => JobText.Read(json);
 
     public static SheetInput Input(Job job, UnitSystem units = UnitSystem.Metric, Paper? paper = null) => new(
         job, Shop.Read(TemplateFiles.Read(TemplateFiles.Shop)).Shop!, SheetWording.Original, paper ?? Paper.A4, units, Date);
@@ -35,6 +30,16 @@ internal static class SheetFiles
     /// <summary>A sheet of a few blocks.</summary>
     public static Sheet Of(params Block[] blocks) =>
         new("Title", "Author", "Subject", Date, "foot", "page {page} of {pages}", Paper.A4, blocks);
+
+    /// <summary>The points of a shape that lie farthest out.</summary>
+    public static IEnumerable<Spot> Extremes(Shape shape) => shape switch
+    {
+        Line line => [line.From, line.To],
+        Polygon polygon => polygon.Corners,
+        Circle circle => [new(circle.Centre.XMm - circle.RadiusMm, circle.Centre.YMm - circle.RadiusMm), new(circle.Centre.XMm + circle.RadiusMm, circle.Centre.YMm + circle.RadiusMm)],
+        Label label => [label.At],
+        _ => [],
+    };
 
     /// <summary>Twenty-four cylinders in a vee, three chambers missing, a customer whose name tries the page.</summary>
     public static Job Largest { get; } = Read(LargestText());

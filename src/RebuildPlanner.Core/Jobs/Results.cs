@@ -95,9 +95,11 @@ public enum VerdictState
 /// <param name="Probability">That the true value is inside; null where a figure is missing.</param>
 /// <param name="Level">The belief wanted.</param>
 /// <param name="Settle">What would settle a verdict not proven, or null.</param>
+/// <param name="Number">Which of the job's limits it is on, from 0: two limits may read alike and be set on different places.</param>
+/// <param name="Place">What the limit is set on; nothing named means all.</param>
 public sealed record Verdict(
     string What, string? Cylinder, string Limit, ResultQuantity? Min, ResultQuantity? Max, VerdictState State, double? Probability,
-    double Level, string? Settle);
+    double Level, string? Settle, int Number, Place Place);
 
 /// <summary>Something to mind.</summary>
 /// <param name="Code">Its code, stable for other programs.</param>

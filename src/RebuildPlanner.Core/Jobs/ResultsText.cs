@@ -1,4 +1,5 @@
 using System.Globalization;
+using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
 
 namespace RebuildPlanner.Core.Jobs;
@@ -44,6 +45,10 @@ public sealed class ResultsText(Results results, UnitSystem system)
             yield return cylinders.Length == 0 || cylinders == All ? same.Key : $"Cylinder {cylinders}: {same.Key}";
         }
     }
+
+    /// <summary>The head, bank or valve a limit is set on; nothing where it is set on none of them.</summary>
+    public static IEnumerable<string> PartsOf(Place place) =>
+        new[] { place.Head, place.Bank, place.Valve?.ToString().ToLowerInvariant() }.OfType<string>();
 
     /// <summary>A probability in per cent. It is never printed as certain: what rounds to 100 % is "> 99.9 %".</summary>
     public static string Belief(double? probability) => probability switch

@@ -10,23 +10,23 @@ namespace RebuildPlanner.Core.Jobs;
 public sealed class Verdicts(StageModel model, StageFigures figures)
 {
     /// <summary>The verdicts on every limit that is judged at the stage, in the order of the limits.</summary>
-    public IReadOnlyList<Verdict> All() => [.. model.Job.Limits.Where(IsJudged).SelectMany(Of)];
+    public IReadOnlyList<Verdict> All() => [.. model.Job.Limits.SelectMany((limit, number) => IsJudged(limit) ? Of(limit, number) : [])];
 
     // A worn engine is not judged as received unless a limit says so.
     private bool IsJudged(Limit limit) =>
         limit.Stage is { } stage ? stage == model.Stage : model.Stage is Stage.Planned or Stage.AsMachined;
 
-    private IEnumerable<Verdict> Of(Limit limit)
+    private IEnumerable<Verdict> Of(Limit limit, int number)
     {
         Line[] lines = [.. Lines(limit)];
         foreach (Line line in lines.Where(line => line.Cylinder is not null))
         {
-            yield return Judge(limit, line.Cylinder, [line]);
+            yield return Judge(limit, number, line.Cylinder, [line]);
         }
 
         if (limit.Place.Cylinder is null)
         {
-            yield return Judge(limit, null, lines);
+            yield return Judge(limit, number, null, lines);
         }
     }
 
@@ -121,7 +121,7 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
         return missing.FirstOrDefault(word => restsOn is null || restsOn.Any(what => WhatWords.Of(what) == word)) ?? own;
     }
 
-    private Verdict Judge(Limit limit, string? cylinder, Line[] lines)
+    private Verdict Judge(Limit limit, int number, string? cylinder, Line[] lines)
     {
         double level = limit.Level ?? Subjects.DefaultLevel(limit.Subject);
         ResultQuantity? min = Bound(limit.Min), max = Bound(limit.Max);
@@ -129,7 +129,7 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
         if (lines.Length == 0 || Array.Exists(lines, line => line.Figure is null))
         {
             string? lacks = lines.FirstOrDefault(line => line.Figure is null).Lacks;
-            return new Verdict(limit.Subject.Word, cylinder, written, min, max, VerdictState.NotProven, null, level, lacks);
+            return new Verdict(limit.Subject.Word, cylinder, written, min, max, VerdictState.NotProven, null, level, lacks, number, limit.Place);
         }
 
         LinearFigure[] judged = [.. lines.Select(line => line.Figure!)];
@@ -142,7 +142,7 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
         }
 
         string? settle = state != VerdictState.NotProven ? null : unstated ?? Settling(limit, judged, level);
-        return new Verdict(limit.Subject.Word, cylinder, written, min, max, state, probability, level, settle);
+        return new Verdict(limit.Subject.Word, cylinder, written, min, max, state, probability, level, settle, number, limit.Place);
     }
 
     private static VerdictState Decide(double probability, double level) =>

@@ -14,7 +14,7 @@ internal static class CylindersPart
         (string, string) length = ("unit", text.Unit(QuantityKind.Length)), volume = ("unit", text.Unit(QuantityKind.Volume));
         yield return new Heading(words.Of(Phrase.CylindersHead), 2);
         yield return new Paragraph(words.Of(Phrase.CylindersLead), Style.Small);
-        yield return Known(
+        Table first = Known(
             results, words,
             (words.Of(Phrase.Ratio), cylinder => cylinder.CompressionRatio is null ? null : text.Value(cylinder.CompressionRatio)),
             (words.Of(Phrase.From95), cylinder => End(cylinder.CompressionRatio, q => q.Low)),
@@ -36,9 +36,9 @@ internal static class CylindersPart
             (words.Of(Phrase.Doubt), cylinder => cylinder.Shares is [{ } most, ..]
                 ? words.Of(Phrase.Share, ("what", most.Input), ("percent", (100.0 * most.Share).ToString("F0", CultureInfo.InvariantCulture)))
                 : null));
-        if (second.Columns.Count > 1)
+        foreach (Table table in new[] { first, second }.Where(table => table.Columns.Count > 1))
         {
-            yield return second;
+            yield return table;
         }
 
         if (results.Cylinders.Any(cylinder => cylinder.CrankingPressure is not null))

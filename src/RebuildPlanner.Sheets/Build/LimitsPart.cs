@@ -36,41 +36,21 @@ internal static class LimitsPart
     /// <summary>The verdict on each limit as a whole: on all its cylinders together, or on the one it names.</summary>
     public static IEnumerable<Verdict> Whole(Results results) => Limits(results).Select(Whole);
 
-    /// <summary>A limit by name.</summary>
-    public static string Name(Verdict verdict, SheetWording words) => verdict.Cylinder is { } cylinder
-        ? words.Of(Phrase.LimitOfCylinder, ("what", verdict.What), ("limit", verdict.Limit), ("cylinder", cylinder))
-        : words.Of(Phrase.LimitName, ("what", verdict.What), ("limit", verdict.Limit));
+    /// <summary>A limit by name, and by the place it is set on.</summary>
+    public static string Name(Verdict verdict, SheetWording words)
+    {
+        (string, string) what = ("what", verdict.What), limit = ("limit", verdict.Limit);
+        string name = verdict.Place.Cylinder is { } cylinder
+            ? words.Of(Phrase.LimitOfCylinder, what, limit, ("cylinder", cylinder))
+            : words.Of(Phrase.LimitName, what, limit);
+        return ResultsText.PartsOf(verdict.Place).Aggregate(name, (named, part) => words.Of(Phrase.LimitOfPart, ("limit", named), ("part", part)));
+    }
 
     private static Verdict Whole(Verdict[] limit) => limit[^1];
 
     /// <summary>The verdicts limit by limit: each cylinder's, and last the one on all of them, unless the limit names one cylinder.</summary>
-    private static IEnumerable<Verdict[]> Limits(Results results)
-    {
-        List<Verdict> limit = [];
-        foreach (Verdict verdict in results.Verdicts)
-        {
-            // A limit on one cylinder has that verdict alone; the next line is then another limit.
-            bool another = limit.Count > 0 && (limit[^1].What, limit[^1].Limit, limit[^1].Level) != (verdict.What, verdict.Limit, verdict.Level);
-            bool repeated = verdict.Cylinder is { } cylinder && limit.Any(earlier => earlier.Cylinder == cylinder);
-            if (another || repeated)
-            {
-                yield return [.. limit];
-                limit.Clear();
-            }
-
-            limit.Add(verdict);
-            if (verdict.Cylinder is null)
-            {
-                yield return [.. limit];
-                limit.Clear();
-            }
-        }
-
-        if (limit.Count > 0)
-        {
-            yield return [.. limit];
-        }
-    }
+    private static IEnumerable<Verdict[]> Limits(Results results) =>
+        results.Verdicts.GroupBy(verdict => verdict.Number).Select(limit => limit.ToArray());
 
     private static string Sentence(Results results, Verdict[] limit, ResultsText text, SheetWording words)
     {
@@ -107,7 +87,7 @@ internal static class LimitsPart
         // Of one cylinder, all of them are that one.
         IEnumerable<string?> rows = [.. results.Cylinders.Select(cylinder => cylinder.Cylinder), .. results.Cylinders.Count > 1 ? new string?[1] : []];
         return new Table(
-            [new Column(words.Of(Phrase.Cylinder), IsText: true), .. columns.Select(limit => new Column(Name(limit[0] with { Cylinder = null }, words)))],
+            [new Column(words.Of(Phrase.Cylinder), IsText: true), .. columns.Select(limit => new Column(Name(limit[0], words)))],
             [.. rows.Select(row => (IReadOnlyList<string>)[row ?? words.Of(Phrase.All), .. columns.Select(limit => Cell(limit, row))])]);
     }
 

@@ -16,6 +16,7 @@ public sealed record SheetInput(Job Job, Shop Shop, SheetWording Words, Paper Pa
 {
     /// <summary>The engine in words.</summary>
     public string Engine => Job.Engine.Description
+        ?? (Job.Engine.Cylinders == 1 ? Words.Of(Phrase.EngineOfOne) : null)
         ?? Words.Of(Phrase.EngineUnnamed, ("cylinders", Job.Engine.Cylinders.ToString(System.Globalization.CultureInfo.InvariantCulture)));
 
     /// <summary>The day of issue as ISO 8601 writes it.</summary>

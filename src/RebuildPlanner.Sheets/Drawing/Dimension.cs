@@ -5,8 +5,8 @@ public static class Dimension
 {
     private const double ArrowMm = 1.8, ArrowHalfWidthMm = 0.35, GapMm = 0.7, PastMm = 1.0, OutsideMm = 3.5, SizePt = 7.5, AboveMm = 0.8;
 
-    // How wide a letter of a figure is, near enough to see whether it fits.
-    private const double LetterMm = 1.45;
+    // How wide and high a letter of a figure is, near enough to see whether it fits.
+    private const double LetterMm = 1.45, LetterHeightMm = 1.9;
 
     /// <summary>A height, between two levels, dimensioned beside the part.</summary>
     /// <param name="fromXMm">Where the witness lines start, mm.</param>
@@ -33,8 +33,12 @@ public static class Dimension
 
         double beside = lineXMm + (side * (AboveMm + 0.4));
         Anchor away = side > 0 ? Anchor.Start : Anchor.End;
+
+        // A figure longer than its line stands on its lower end and overhangs the upper, past the ends of the witness lines: level, it would
+        // run off the drawing or into the next one.
+        double clear = lineXMm + (side > 0 ? PastMm + LetterHeightMm + AboveMm : -(PastMm + AboveMm));
         yield return outside ? new Label(new(beside, topMm - AboveMm), text, SizePt, away)
-            : text.Length * LetterMm > bottomMm - topMm ? new Label(new(beside, (0.5 * (topMm + bottomMm)) + 1.0), text, SizePt, away)
+            : text.Length * LetterMm > bottomMm - topMm ? new Label(new(clear, bottomMm), text, SizePt, Upright: true)
             : new Label(new(lineXMm - AboveMm, 0.5 * (topMm + bottomMm)), text, SizePt, Anchor.Middle, Upright: true);
     }
 

@@ -10,6 +10,9 @@ internal static class CrownEdge
 {
     private const double TopMm = 20.0, MostGapMm = 26.0, MostOverhangMm = 13.0, BlockMm = 20.0, HeadMm = 11.0, WordsPt = 8.0;
 
+    // How far a piston that meets the head may be drawn into it: not over the head's name.
+    private const double MostMeetingMm = 5.5;
+
     private static readonly double[] _enlargements = [50.0, 20.0, 10.0, 5.0, 2.0, 1.0];
 
     /// <summary>The shapes between two edges of the drawing and how far down they reach; null without gasket or deck.</summary>
@@ -22,8 +25,10 @@ internal static class CrownEdge
         }
 
         double overhangMm = Math.Max(0.0, 0.5 * ((figures.OpeningMm ?? figures.BoreMm) - figures.BoreMm));
+        double gapMm = figures.GapMm ?? (gasketMm + figures.DeckMm);
         double scale = _enlargements.FirstOrDefault(
-            size => (gasketMm + Math.Abs(figures.DeckMm)) * size <= MostGapMm && overhangMm * size <= MostOverhangMm, _enlargements[^1]);
+            size => (gasketMm + Math.Abs(figures.DeckMm)) * size <= MostGapMm && overhangMm * size <= MostOverhangMm && -gapMm * size <= MostMeetingMm,
+            _enlargements[^1]);
         double edgeXMm = leftMm + 26.0, wallXMm = Math.Min(edgeXMm + 22.0, rightMm), faceYMm = TopMm + HeadMm, deckYMm = faceYMm + (gasketMm * scale);
         double crownYMm = deckYMm + (figures.DeckMm * scale), bottomMm = Math.Max(deckYMm, crownYMm) + BlockMm;
         double pistonXMm = edgeXMm - Math.Clamp(0.5 * (figures.BoreMm - (figures.TopLandDiameterMm ?? figures.BoreMm)) * scale, 0.7, 12.0);
@@ -38,7 +43,7 @@ internal static class CrownEdge
             new Line(new(edgeXMm, deckYMm), new(edgeXMm, bottomMm), Pen.Outline),
             Polygon.Rectangle(gasketXMm, faceYMm, wallXMm, deckYMm, Pen.Outline, 0.25),
             .. Piston(figures, leftMm, pistonXMm, crownYMm, bottomMm, scale),
-            .. Name(words.Of(Phrase.SectionHeadPart), leftMm + 10.0, TopMm + 6.0), .. Name(words.Of(Phrase.SectionBlockPart), edgeXMm + 11.0, bottomMm - 7.0),
+            .. Name(words.Of(Phrase.SectionHeadPart), leftMm + 14.0, TopMm + 4.0), .. Name(words.Of(Phrase.SectionBlockPart), edgeXMm + 11.0, bottomMm - 7.0),
             .. Name(words.Of(Phrase.SectionPistonPart), leftMm + 10.0, bottomMm - 3.0),
             new Label(new(leftMm, 3.5), words.Of(Phrase.SectionDetail, ("scale", CylinderSection.Ratio(scale))), WordsPt, Bold: true),
         ];
@@ -46,15 +51,18 @@ internal static class CrownEdge
         double outXMm = wallXMm + 5.0;
         shapes.AddRange(Dimension.Vertical(wallXMm, faceYMm, deckYMm, outXMm, "A"));
         Note("A", words.Of(Phrase.SectionGasket, ("value", figures.Text(What.GasketThickness))), 8.0);
-        double gapMm = figures.GapMm ?? (gasketMm + figures.DeckMm), closestYMm = faceYMm + ((gapMm - figures.RecessMm) * scale);
-        shapes.AddRange(Dimension.Vertical(leftMm + 19.0, Math.Min(deckYMm, crownYMm), Math.Max(deckYMm, crownYMm), edgeXMm + 5.0, "B"));
+        double closestYMm = faceYMm + ((gapMm - figures.RecessMm) * scale);
+
+        // Inside the bore, where there is neither gasket nor hatching behind the letter.
+        shapes.AddRange(Dimension.Vertical(edgeXMm, Math.Min(deckYMm, crownYMm), Math.Max(deckYMm, crownYMm), edgeXMm - 7.0, "B"));
         if (Math.Abs(closestYMm - crownYMm) > 0.15)
         {
             // The piston rocks or stands askew: where it comes closest is dashed.
             shapes.Add(new Line(new(leftMm, closestYMm), new(pistonXMm, closestYMm), Pen.Dashed));
         }
 
-        shapes.AddRange(Dimension.Vertical(leftMm + 12.0, faceYMm, closestYMm, leftMm + 6.0, "C"));
+        // Where by the figures the piston meets the head, the crown lies above the face.
+        shapes.AddRange(Dimension.Vertical(leftMm + 12.0, Math.Min(faceYMm, closestYMm), Math.Max(faceYMm, closestYMm), leftMm + 6.0, "C"));
         Note("B", words.Of(Phrase.SectionDeck, ("value", figures.Text(What.Deck))), 12.0);
         if (cylinder.PistonToHead is { } gap)
         {

@@ -81,7 +81,8 @@ public static class CylinderSection
             yield return shape;
         }
 
-        double openingMm = 0.5 * (figures.OpeningMm ?? figures.BoreMm);
+        // The wall is a stand-in: an opening wider than that leaves no gasket to draw.
+        double openingMm = Math.Min(0.5 * (figures.OpeningMm ?? figures.BoreMm), wallMm);
         foreach (double side in new[] { -1.0, 1.0 })
         {
             Spot[] block = [at(side * boreMm, 0.0), at(side * wallMm, 0.0), at(side * wallMm, endMm), at(side * boreMm, endMm)];

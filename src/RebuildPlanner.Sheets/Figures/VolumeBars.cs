@@ -1,6 +1,8 @@
+using System.Text;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Quantities;
 using RebuildPlanner.Sheets.Drawing;
+using RebuildPlanner.Sheets.Pages;
 using RebuildPlanner.Sheets.Templates;
 
 namespace RebuildPlanner.Sheets.Figures;
@@ -8,10 +10,13 @@ namespace RebuildPlanner.Sheets.Figures;
 /// <summary>The clearance volume of each cylinder as a bar of its parts, all to one scale; parts are told apart by hatching, not colour.</summary>
 public static class VolumeBars
 {
-    private const double WidthMm = 174.0, LabelMm = 16.0, ValueMm = 17.0, HeadMm = 9.0, AxisMm = 9.0, TextPt = 8.0;
+    private const double WidthMm = 174.0, LabelMm = 18.0, ValueMm = 17.0, HeadMm = 9.0, AxisMm = 9.0, TextPt = 8.0;
 
     // A bar for one cylinder may be stout; twenty-four must leave room on the page for a caption.
     private const double MostRowMm = 9.0, MostRowsMm = 190.0;
+
+    // No letter of the figure's type is wider on average; what the dash for a clearance volume not known takes at the right edge.
+    private const double LetterMm = 1.5, DashMm = 4.0, BehindMm = 2.0, LeastBarMm = 40.0;
 
     private sealed record Part(Phrase Name, Func<CylinderResult, ResultQuantity?> Of, double? Grey, double? HatchMm, double HatchDeg);
 
@@ -27,12 +32,17 @@ public static class VolumeBars
     /// <summary>The figure, or null where no part of any cylinder is known.</summary>
     public static Picture? Draw(Results results, UnitSystem system, SheetWording words)
     {
+        if (!results.Cylinders.Any(cylinder => _parts.Any(part => part.Of(cylinder) is not null)))
+        {
+            return null;
+        }
+
         double InUnit(ResultQuantity quantity) => QuantityPrint.InUnit(quantity.Value, QuantityKind.Volume, system);
         double[] ends =
         [
             0.0, .. results.Cylinders.SelectMany(cylinder => new[]
             {
-                _parts.Sum(part => part.Of(cylinder) is { } volume ? Math.Max(0.0, InUnit(volume)) : 0.0),
+                Right(cylinder, InUnit),
                 _parts.Sum(part => part.Of(cylinder) is { } volume ? Math.Min(0.0, InUnit(volume)) : 0.0),
                 cylinder.ClearanceVolume is { } clearance ? InUnit(clearance) : 0.0,
             }),
@@ -47,7 +57,10 @@ public static class VolumeBars
         double step = Step((most - least) / 8.0);
         (least, most) = (Math.Floor(least / step) * step, Math.Ceiling(most / step) * step);
         double rowMm = Math.Min(MostRowMm, MostRowsMm / results.Cylinders.Count), rowsMm = rowMm * results.Cylinders.Count;
-        double perUnit = (WidthMm - LabelMm - ValueMm) / (most - least);
+
+        // The scale leaves room behind each bar for the words of what it lacks.
+        double perUnit = results.Cylinders.Where(cylinder => cylinder.ClearanceVolume is null).Select(cylinder => RoomMm(cylinder, words) / (Right(cylinder, InUnit) - least))
+            .Append((WidthMm - LabelMm - ValueMm) / (most - least)).Min();
         double X(double volume) => LabelMm + ((volume - least) * perUnit);
 
         List<Shape> shapes = [.. Legend(words), .. Axis(least, most, step, X, rowsMm, unit)];
@@ -122,12 +135,23 @@ public static class VolumeBars
         else
         {
             // Of a bar with a part missing, its length says nothing: that is written behind it.
-            string[] missing = [.. _parts.Where(part => part.Name != Phrase.TopLand && part.Of(cylinder) is null).Select(part => words.Of(part.Name))];
-            yield return new Label(new(x(right) + 2.0, baseMm), words.Of(Phrase.VolumesMissing, ("parts", string.Join(", ", missing))), TextPt);
+            yield return new Label(new(x(right) + BehindMm, baseMm), Missing(cylinder, words), TextPt);
         }
 
         yield return new Label(new(WidthMm, baseMm), text.Value(cylinder.ClearanceVolume), TextPt, Anchor.End);
     }
+
+    /// <summary>Where the bar of a cylinder ends on the right, in the unit printed.</summary>
+    private static double Right(CylinderResult cylinder, Func<ResultQuantity, double> inUnit) =>
+        _parts.Sum(part => part.Of(cylinder) is { } volume ? Math.Max(0.0, inUnit(volume)) : 0.0);
+
+    /// <summary>What a bar without its clearance volume may take, mm.</summary>
+    private static double RoomMm(CylinderResult cylinder, SheetWording words) =>
+        Math.Max(LeastBarMm, WidthMm - DashMm - LabelMm - BehindMm - (LetterMm * Missing(cylinder, words).Length));
+
+    private static string Missing(CylinderResult cylinder, SheetWording words) => words.Of(
+        Phrase.VolumesMissing,
+        ("parts", string.Join(", ", _parts.Where(part => part.Name != Phrase.TopLand && part.Of(cylinder) is null).Select(part => words.Of(part.Name)))));
 
     private static IEnumerable<Shape> Box(Part part, double leftMm, double topMm, double rightMm, double bottomMm)
     {
@@ -148,8 +172,13 @@ public static class VolumeBars
             + string.Join(", ", _parts.Select(part => $"{words.Of(part.Name)} {text.Value(part.Of(cylinder))}"))
             + $"; {words.Of(Phrase.VolumesTotal, ("value", text.Value(cylinder.ClearanceVolume)), ("unit", unit))}."));
 
-    // A bar has room for a short name only; the tables say it whole.
-    private static string Short(string label) => label.Length <= 8 ? label : label[..7] + "…";
+    // Before a bar there is room for six of the widest letters; the tables say a longer name whole.
+    private static string Short(string label)
+    {
+        const int Most = 6;
+        Rune[] letters = [.. PlainText.Of(label).EnumerateRunes()];
+        return letters.Length <= Most ? label : string.Concat(letters.Take(Most - 1)) + "…";
+    }
 
     /// <summary>1, 2 or 5 times a power of ten, not below the least step wanted.</summary>
     private static double Step(double least)

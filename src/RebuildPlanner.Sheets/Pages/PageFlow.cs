@@ -88,6 +88,9 @@ public sealed class PageFlow
     /// <summary>Whether a height still fits on the page; on an empty page everything does, since it would fit on no other.</summary>
     internal bool Fits(double heightMm) => _endless || _isEmptyPage || _yMm + heightMm <= _paper.FloorMm;
 
+    /// <summary>What is left of the page, mm.</summary>
+    internal double RoomMm => _endless ? double.PositiveInfinity : _paper.FloorMm - _yMm;
+
     /// <summary>Starts a new page unless the present one is empty.</summary>
     internal void TurnPage()
     {
@@ -274,6 +277,13 @@ public sealed class PageFlow
     {
         const double PadMm = 3.0;
         double heightMm = HeightOf(framed.Blocks, _leftMm + PadMm, _widthMm - (2.0 * PadMm)) + (2.0 * PadMm);
+        if (!_endless && heightMm > _paper.FloorMm - Paper.TopMm)
+        {
+            // No page holds the frame: better without it than off the paper.
+            PlaceAll(framed.Blocks);
+            return;
+        }
+
         Keep(heightMm);
         double topMm = _yMm;
         PageFlow inner = new(_paper, _ruler, _leftMm + PadMm, _widthMm - (2.0 * PadMm), endless: true) { _yMm = topMm + PadMm, _isEmptyPage = false };

@@ -46,7 +46,7 @@ internal sealed class TableFlow
     private double LeastMm()
     {
         double rowsMm = _table.Rows.Sum(RowHeightMm);
-        return HeadMm + (rowsMm <= UnbrokenMm ? rowsMm : _table.Rows.Take(FirstRows).Sum(RowHeightMm));
+        return HeadMm + (rowsMm <= UnbrokenMm ? rowsMm : _table.Rows.Take(FirstRows).Sum(KeptMm));
     }
 
     private void PlaceRows()
@@ -60,24 +60,49 @@ internal sealed class TableFlow
         _flow.In(Role.Row, () => PlaceHead(Role.HeadCell, headMm));
         foreach (IReadOnlyList<string> row in _table.Rows)
         {
-            double heightMm = RowHeightMm(row);
-            if (!_flow.Fits(heightMm))
+            if (!_flow.Fits(KeptMm(row)))
             {
-                _flow.TurnPage();
-                _flow.In(Role.Artifact, () => PlaceHead(null, headMm));
+                TurnPage(headMm);
             }
 
-            _flow.In(Role.Row, () => PlaceCells(row, Role.Cell, bold: false));
-            Boxes(heightMm);
-            _flow.Down(heightMm);
+            PlaceRow([.. row.Select((cell, column) => LinesOf(cell, column, bold: false))], headMm);
             _flow.Rule(_flow.LeftMm, _flow.LeftMm + _widthsMm.Sum(), _flow.YMm, HairMm);
         }
+    }
+
+    /// <summary>A row; of a high one, what the page does not hold goes on over the next, as a row of its own.</summary>
+    private void PlaceRow(IReadOnlyList<string>[] cells, double headMm)
+    {
+        double lineMm = PageFlow.LineMm(_sizePt);
+        int most = cells.Max(lines => lines.Count), from = 0;
+        while (true)
+        {
+            int count = Math.Clamp((int)((_flow.RoomMm - (2.0 * PadYMm)) / lineMm), 1, most - from), start = from;
+            double heightMm = Math.Max(_table.RowMm, (count * lineMm) + (2.0 * PadYMm));
+            _flow.In(Role.Row, () => PlaceCells(cells, start, start + count, Role.Cell, bold: false));
+            Boxes(heightMm);
+            _flow.Down(heightMm);
+            from += count;
+            if (from >= most)
+            {
+                return;
+            }
+
+            TurnPage(headMm);
+        }
+    }
+
+    private void TurnPage(double headMm)
+    {
+        _flow.TurnPage();
+        _flow.In(Role.Artifact, () => PlaceHead(null, headMm));
     }
 
     private void PlaceHead(Role? role, double heightMm)
     {
         double rightMm = _flow.LeftMm + _widthsMm.Sum();
-        PlaceCells([.. _table.Columns.Select(column => column.Title)], role, bold: true);
+        IReadOnlyList<string>[] titles = [.. _table.Columns.Select((column, index) => LinesOf(column.Title, index, bold: true))];
+        PlaceCells(titles, 0, titles.Max(lines => lines.Count), role, bold: true);
         _flow.Down(heightMm);
         if (role is null)
         {
@@ -89,19 +114,19 @@ internal sealed class TableFlow
         }
     }
 
-    private void PlaceCells(IReadOnlyList<string> cells, Role? role, bool bold)
+    private void PlaceCells(IReadOnlyList<string>[] cells, int from, int to, Role? role, bool bold)
     {
         double xMm = _flow.LeftMm;
-        for (int column = 0; column < cells.Count; column++)
+        for (int column = 0; column < cells.Length; column++)
         {
             double leftMm = xMm + PadXMm, rightMm = xMm + _widthsMm[column] - PadXMm;
             bool isText = _table.Columns[column].IsText || IsForm;
-            IReadOnlyList<string> lines = LinesOf(cells[column], column, bold);
+            IReadOnlyList<string> lines = cells[column];
             void Draw()
             {
-                for (int line = 0; line < lines.Count; line++)
+                for (int line = from; line < Math.Min(to, lines.Count); line++)
                 {
-                    double topMm = _flow.YMm + PadYMm + (line * PageFlow.LineMm(_sizePt));
+                    double topMm = _flow.YMm + PadYMm + ((line - from) * PageFlow.LineMm(_sizePt));
                     _flow.Text(isText ? leftMm : rightMm, topMm, isText ? PageFlow.Broken(lines, line) : lines[line], _sizePt, bold, isText ? Anchor.Start : Anchor.End);
                 }
             }
@@ -136,6 +161,9 @@ internal sealed class TableFlow
             }
         });
     }
+
+    // A row as low as a table that is not broken is not broken either.
+    private double KeptMm(IReadOnlyList<string> row) => Math.Min(RowHeightMm(row), UnbrokenMm);
 
     private double RowHeightMm(IReadOnlyList<string> row) => Math.Max(_table.RowMm, HeightMm(row, bold: false));
 

@@ -80,8 +80,9 @@ public static class PdfSheet
             switch (mark)
             {
                 case PageMark:
-                    graphics?.Dispose();
+                    // What goes on over the page is closed by the library on the old one, which must still be open for that.
                     page = document.AddPage();
+                    graphics?.Dispose();
                     page.Width = XUnit.FromMillimeter(sheet.Paper.WidthMm);
                     page.Height = XUnit.FromMillimeter(sheet.Paper.HeightMm);
                     graphics = XGraphics.FromPdfPage(page);

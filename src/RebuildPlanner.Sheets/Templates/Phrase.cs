@@ -4,11 +4,11 @@ namespace RebuildPlanner.Sheets.Templates;
 #pragma warning disable CS1591 // The words in the file say what each phrase is.
 public enum Phrase
 {
-    Title, Subject, Foot, PageOf, Customer, Contact, Job, JobTitle, Opened, Engine, EngineUnnamed, Complaint, Asked,
+    Title, Subject, Foot, PageOf, Customer, Contact, Job, JobTitle, Opened, Engine, EngineUnnamed, EngineOfOne, Complaint, Asked,
     Stage, Issued, FuelRecorded, AnswerLead, AnswerSame, AnswerRange, AnswerNone, AnswerWithout, AnswerDisplacement, AnswerHeld,
     AnswerOutside, AnswerOpen, AnswerNoLimits, AnswerMeaning, MissingHead, MissingLead, CylindersHead, CylindersLead, Cylinder,
     Ratio, From95, WorstFrom, To, Bore, Swept, Clearance, PistonToHead, Taper, OutOfRound, Trapped, Cranking, Doubt, Share,
-    CrankingNote, LimitsHead, LimitsNone, LimitName, LimitOfCylinder, LimitWithin, LimitOutside, LimitOpen, LimitMissing,
+    CrankingNote, LimitsHead, LimitsNone, LimitName, LimitOfCylinder, LimitOfPart, LimitWithin, LimitOutside, LimitOpen, LimitMissing,
     LimitSettle, LimitNoSettle, LimitSettleCylinders, LimitsTable, All, VolumesHead, VolumesCaption, VolumesMissing, VolumesTotal, Chamber, Gasket, Deck, Crown,
     TopLand, CrossCheck, SectionHead, SectionCaption, SectionScale, SectionDetail, SectionStroke, SectionRod, SectionBore,
     SectionGap, SectionDeck, SectionGasket, SectionOpening, SectionTopLand, SectionHeadPart, SectionBlockPart, SectionPistonPart,

@@ -3,6 +3,7 @@ using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Tests.JobFile;
+using RebuildPlanner.Tests.Shared;
 
 namespace RebuildPlanner.Core.Tests.Entries;
 

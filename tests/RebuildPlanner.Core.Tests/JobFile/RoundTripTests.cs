@@ -2,6 +2,7 @@ using System.Text;
 using CsCheck;
 using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
+using RebuildPlanner.Tests.Shared;
 
 namespace RebuildPlanner.Core.Tests.JobFile;
 

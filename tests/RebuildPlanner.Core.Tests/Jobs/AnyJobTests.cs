@@ -1,6 +1,6 @@
 using CsCheck;
 using RebuildPlanner.Core.Jobs;
-using RebuildPlanner.Core.Tests.JobFile;
+using RebuildPlanner.Tests.Shared;
 
 namespace RebuildPlanner.Core.Tests.Jobs;
 

@@ -3,6 +3,7 @@ using RebuildPlanner.Core.Cylinders;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Numerics;
 using RebuildPlanner.Core.Stacks;
+using RebuildPlanner.Tests.Shared;
 
 namespace RebuildPlanner.Core.Tests.Jobs;
 

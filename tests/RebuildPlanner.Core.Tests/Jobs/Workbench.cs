@@ -1,8 +1,7 @@
 using System.Globalization;
-using System.Text;
 using RebuildPlanner.Core.Cylinders;
-using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
+using RebuildPlanner.Tests.Shared;
 
 namespace RebuildPlanner.Core.Tests.Jobs;
 
@@ -39,12 +38,7 @@ internal static class Workbench
     }
 
     /// <summary>Reads a job that must be without fault.</summary>
-    public static Job Read(string json)
-    {
-        (Job? job, IReadOnlyList<Fault> faults) = JobFileReader.Read(Encoding.UTF8.GetBytes(json));
-        Assert.True(job is not null, string.Join("\n", faults));
-        return job!;
-    }
+    public static Job Read(string json) => JobText.Read(json);
 
     /// <summary>One output of the first cylinder, coherent unit, or null.</summary>
     public static double? Value(Job job, Stage stage, Output output, int cylinder = 0) =>

@@ -10,6 +10,7 @@ using UglyToad.PdfPig.Content;
 namespace RebuildPlanner.Sheets.Tests.Build;
 
 /// <summary>What stands on the paper, read back by another library, against the results as other programs get them.</summary>
+[Collection(OneDocument.AtATime)]
 public class PrintedFiguresTests
 {
     private const double Mm3PerCubicInch = 16387.064, MmPerInch = 25.4, KPaPerPsi = 6.894757293168; // exact, exact, NIST SP 811 (from memory)

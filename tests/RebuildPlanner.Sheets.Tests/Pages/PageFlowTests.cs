@@ -80,6 +80,38 @@ public class PageFlowTests
         Assert.All(Labels(marks), label => Assert.InRange(label.At.YMm, 0.0, Paper.A4.HeightMm));
     }
 
+    public static TheoryData<string> Long => ["table", "facts", "frame", "paragraph", "points"];
+
+    // Each of these keeps together what it can; of what no page can hold, nothing may run off the paper or be lost.
+    [Theory]
+    [MemberData(nameof(Long))]
+    public void What_no_page_can_hold_goes_on_over_the_next(string kind)
+    {
+        string[] words = [.. Enumerable.Range(1, 3000).Select(number => $"w{number}")];
+        string text = string.Join(' ', words);
+        Block block = kind switch
+        {
+            "table" => new Table([new Column("HEAD", IsText: true), new Column("n")], [[text, "1"], ["last", "2"]]),
+            "facts" => new Facts([("NAME", text), ("last", "2")]),
+            "frame" => new Framed([new Paragraph(text), new Paragraph("last 2")]),
+            "points" => new Points([text, "last 2"]),
+            _ => new Paragraph(text + " last 2"),
+        };
+
+        string[][] pages = PagesOf(SheetFiles.Of(new Heading("TITLE", 2), block));
+
+        Assert.True(pages.Length > 1);
+        Assert.Equal(words, pages.SelectMany(page => page).SelectMany(line => line.Split(' ')).Where(word => word.StartsWith('w')));
+        Assert.All(
+            Labels(PageFlow.Of(SheetFiles.Of(new Heading("TITLE", 2), block) with { Foot = "", PageOf = "" }, Ruler)),
+            label => Assert.InRange(label.At.YMm, Paper.TopMm, Paper.A4.FloorMm));
+        Assert.Contains(pages[0], line => line.StartsWith("w1 ", StringComparison.Ordinal)); // the heading is not left alone on the first page
+        if (kind is "table" or "facts")
+        {
+            Assert.All(pages, page => Assert.Single(page, line => line is "HEAD" or "NAME")); // what it is stands on every page
+        }
+    }
+
     [Fact]
     public void Pages_are_numbered_n_of_m()
     {

@@ -15,6 +15,7 @@ using UglyToad.PdfPig.Outline;
 
 namespace RebuildPlanner.Sheets.Tests.Pdf;
 
+[Collection(OneDocument.AtATime)]
 public class PdfSheetTests
 {
     private const string Awkward = "Smith & Sons <x> \"Łódź\" 'Ærø' ]]> \\ (a) –";
@@ -167,6 +168,20 @@ public class PdfSheetTests
                 Assert.InRange(letter.BoundingBox.Bottom * MmPerPt, 8.0, sheetPaper.HeightMm - 8.0);
             });
         });
+    }
+
+    [Theory]
+    [InlineData(1)]
+    [InlineData(5)]
+    public void Text_that_goes_on_over_a_page_stays_one_stretch(int pages)
+    {
+        string text = string.Concat(Enumerable.Repeat("a note of some words ", 300 * pages)).TrimEnd();
+        byte[] written = Written(SheetFiles.Of(new Paragraph("before"), new Points([text]), new Paragraph("after")) with { Foot = "", PageOf = "" });
+        using PdfDocument pdf = PdfDocument.Open(written);
+
+        Assert.True(pdf.NumberOfPages > pages);
+        Assert.Equal(Squeezed($"before•{text}after"), Squeezed(string.Concat(pdf.GetPages().Select(page => page.Text))));
+        Assert.Equal(1, Count(Encoding.Latin1.GetString(written), "/S/LI/"));
     }
 
     [Fact]

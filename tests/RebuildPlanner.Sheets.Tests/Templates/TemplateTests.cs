@@ -55,7 +55,7 @@ public class TemplateTests
 
     [Theory]
     [InlineData("\"title\": \"Build sheet\"", "\"titel\": \"Build sheet\"", 7, "phrases.titel", "did you mean 'title'?")]
-    [InlineData("between {low} and {high}\",\n    \"answerRange\"", "between {lo} and {high}\",\n    \"answerRange\"", 26, "phrases.answerSame", "did you mean 'low'?")]
+    [InlineData("between {low} and {high}\",\n    \"answerRange\"", "between {lo} and {high}\",\n    \"answerRange\"", 27, "phrases.answerSame", "did you mean 'low'?")]
     [InlineData("page {page} of {pages}", "page {page of {pages}", 10, "phrases.pageOf", "a brace is opened and not closed")]
     [InlineData("page {page} of {pages}", "page page} of {pages}", 10, "phrases.pageOf", "a brace is opened and not closed")]
     [InlineData("\"version\": 1", "\"version\": 2", 5, "version", "version 1 only")]

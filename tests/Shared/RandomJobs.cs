@@ -4,7 +4,7 @@ using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
 
-namespace RebuildPlanner.Core.Tests.JobFile;
+namespace RebuildPlanner.Tests.Shared;
 
 /// <summary>Jobs that may stand in a file, drawn part by part; every word and every line of the closed list comes up.</summary>
 internal static class RandomJobs

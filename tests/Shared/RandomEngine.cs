@@ -2,7 +2,7 @@ using System.Globalization;
 using CsCheck;
 using RebuildPlanner.Core.Jobs;
 
-namespace RebuildPlanner.Core.Tests.Jobs;
+namespace RebuildPlanner.Tests.Shared;
 
 /// <summary>Engines of two cylinders with figures anywhere a workshop meets them, for laws that must hold whatever the numbers.</summary>
 /// <param name="Bore">mm.</param>
@@ -44,7 +44,7 @@ internal sealed record RandomEngine(double Bore, double Stroke, double[] Chamber
             $$""" { "what": "chamber", "cylinder": "{{index + 1}}", "value": "{{Volume(reading)}}", "gauge": "bur", "stage": "as received" } """)));
         string bores = string.Join(", ", new[] { "top", "bottom" }.SelectMany(at => Enumerable.Range(1, 2).Select(cylinder =>
             $$""" { "what": "bore", "cylinder": "{{cylinder}}", "at": "{{at}}", "axis": "thrust", "value": "{{Length(at == "top" ? Bore : Bore - 0.01)}}", "gauge": "bg", "stage": "as received" } """)));
-        return Workbench.Read(
+        return JobText.Read(
             $$"""
             { "format": "rebuild-planner-job", "version": 1, "job": { "number": "R" },
               "engine": { "cylinders": 2, "stroke": "{{Length(Stroke, 0.05)}}", "rodLength": "{{Length(1.7 * Stroke, 0.1)}}", "pinOffset": "{{Length(Offset, 0.1)}}",
