@@ -73,7 +73,10 @@ public static class SheetCommand
         string key = $"sheet-{Convert.ToHexStringLower(SHA256.HashData(pdf))[..12]}";
         JsonObject body = new()
         {
-            ["stage"] = StageWords.Of(results.Stage), ["date"] = input.Issued, ["paper"] = input.Paper.Word, ["units"] = input.Units == UnitSystem.Inch ? "inch" : "mm",
+            ["stage"] = StageWords.Of(results.Stage),
+            ["date"] = input.Issued,
+            ["paper"] = input.Paper.Word,
+            ["units"] = input.Units == UnitSystem.Inch ? "inch" : "mm",
             ["figures"] = Convert.ToHexStringLower(SHA256.HashData(ResultsJson.Write(results))),
         };
         WriteOptions.Write(store, number, [new Entry(key, EntryKind.Sheet, body.ToJsonString(), terminal.Now())], "sheet", terminal, (key, pdf));
