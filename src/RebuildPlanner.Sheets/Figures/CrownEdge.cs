@@ -10,8 +10,8 @@ internal static class CrownEdge
 {
     private const double TopMm = 20.0, MostGapMm = 26.0, MostOverhangMm = 13.0, BlockMm = 20.0, HeadMm = 11.0, WordsPt = 8.0;
 
-    // How far a piston that meets the head may be drawn into it: not over the head's name.
-    private const double MostMeetingMm = 5.5;
+    // How far a recess, or a piston that meets the head, may be drawn into the head: not over its name.
+    private const double MostInHeadMm = 5.5;
 
     private static readonly double[] _enlargements = [50.0, 20.0, 10.0, 5.0, 2.0, 1.0];
 
@@ -27,18 +27,23 @@ internal static class CrownEdge
         double overhangMm = Math.Max(0.0, 0.5 * ((figures.OpeningMm ?? figures.BoreMm) - figures.BoreMm));
         double gapMm = figures.GapMm ?? (gasketMm + figures.DeckMm);
         double scale = _enlargements.FirstOrDefault(
-            size => (gasketMm + Math.Abs(figures.DeckMm)) * size <= MostGapMm && overhangMm * size <= MostOverhangMm && -gapMm * size <= MostMeetingMm,
+            size => (gasketMm + Math.Abs(figures.DeckMm)) * size <= MostGapMm && overhangMm * size <= MostOverhangMm && Math.Max(figures.RecessMm, figures.RecessMm - gapMm) * size <= MostInHeadMm,
             _enlargements[^1]);
         double edgeXMm = leftMm + 26.0, wallXMm = Math.Min(edgeXMm + 22.0, rightMm), faceYMm = TopMm + HeadMm, deckYMm = faceYMm + (gasketMm * scale);
         double crownYMm = deckYMm + (figures.DeckMm * scale), bottomMm = Math.Max(deckYMm, crownYMm) + BlockMm;
         double pistonXMm = edgeXMm - Math.Clamp(0.5 * (figures.BoreMm - (figures.TopLandDiameterMm ?? figures.BoreMm)) * scale, 0.7, 12.0);
         double gasketXMm = Math.Clamp(edgeXMm + (0.5 * ((figures.OpeningMm ?? figures.BoreMm) - figures.BoreMm) * scale), pistonXMm, wallXMm - 2.0);
 
-        Spot[] head = [new(leftMm, TopMm), new(wallXMm, TopMm), new(wallXMm, faceYMm), new(leftMm, faceYMm)];
+        double roofYMm = faceYMm - (figures.RecessMm * scale);
+        Spot[] head =
+        [
+            new(leftMm, TopMm), new(wallXMm, TopMm), new(wallXMm, faceYMm), new(edgeXMm, faceYMm), new(edgeXMm, roofYMm), new(leftMm, roofYMm),
+        ];
         Spot[] block = [new(edgeXMm, deckYMm), new(wallXMm, deckYMm), new(wallXMm, bottomMm), new(edgeXMm, bottomMm)];
         List<Shape> shapes =
         [
-            .. Hatching.Of(head, 2.2, 45.0), new Line(new(leftMm, faceYMm), new(wallXMm, faceYMm), Pen.Outline),
+            .. Hatching.Of(head, 2.2, 45.0), new Line(new(edgeXMm, faceYMm), new(wallXMm, faceYMm), Pen.Outline),
+            new Line(new(edgeXMm, roofYMm), new(edgeXMm, faceYMm), Pen.Outline), new Line(new(leftMm, roofYMm), new(edgeXMm, roofYMm), Pen.Outline),
             .. Hatching.Of(block, 2.2, -45.0), new Line(new(edgeXMm, deckYMm), new(wallXMm, deckYMm), Pen.Outline),
             new Line(new(edgeXMm, deckYMm), new(edgeXMm, bottomMm), Pen.Outline),
             Polygon.Rectangle(gasketXMm, faceYMm, wallXMm, deckYMm, Pen.Outline, 0.25),
@@ -51,7 +56,7 @@ internal static class CrownEdge
         double outXMm = wallXMm + 5.0;
         shapes.AddRange(Dimension.Vertical(wallXMm, faceYMm, deckYMm, outXMm, "A"));
         Note("A", words.Of(Phrase.SectionGasket, ("value", figures.Text(What.GasketThickness))), 8.0);
-        double closestYMm = faceYMm + ((gapMm - figures.RecessMm) * scale);
+        double closestYMm = roofYMm + (gapMm * scale);
 
         // Inside the bore, where there is neither gasket nor hatching behind the letter.
         shapes.AddRange(Dimension.Vertical(edgeXMm, Math.Min(deckYMm, crownYMm), Math.Max(deckYMm, crownYMm), edgeXMm - 7.0, "B"));
@@ -61,8 +66,8 @@ internal static class CrownEdge
             shapes.Add(new Line(new(leftMm, closestYMm), new(pistonXMm, closestYMm), Pen.Dashed));
         }
 
-        // Where by the figures the piston meets the head, the crown lies above the face.
-        shapes.AddRange(Dimension.Vertical(leftMm + 12.0, Math.Min(faceYMm, closestYMm), Math.Max(faceYMm, closestYMm), leftMm + 6.0, "C"));
+        // Where by the figures the piston meets the head, the crown lies above the roof.
+        shapes.AddRange(Dimension.Vertical(leftMm + 12.0, Math.Min(roofYMm, closestYMm), Math.Max(roofYMm, closestYMm), leftMm + 6.0, "C"));
         Note("B", words.Of(Phrase.SectionDeck, ("value", figures.Text(What.Deck))), 12.0);
         if (cylinder.PistonToHead is { } gap)
         {

@@ -159,6 +159,29 @@ public class FigureTests
         Assert.All(section.Shapes.SelectMany(SheetFiles.Extremes), spot => Assert.InRange(spot.XMm, 0.0, section.WidthMm));
     }
 
+    // Gasket 1.2 mm, deck 0.5 mm proud, recess 0.8 mm: 1.5 mm of gap, and as much is drawn under the letter that says so.
+    [Fact]
+    public void A_recess_in_the_head_is_part_of_the_gap_that_is_drawn()
+    {
+        Job recessed = SheetFiles.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "R" }, "engine": { "cylinders": 1, "stroke": "78 mm" },
+              "given": [ { "what": "bore", "value": "81 mm" }, { "what": "gasket thickness", "value": "1.2 mm" }, { "what": "deck", "value": "0.5 mm proud" },
+                { "what": "head recess", "value": "0.8 mm" }, { "what": "gasket opening", "value": "82 mm" } ] }
+            """);
+        Results results = StageResults.Of(recessed, Stage.AsReceived);
+
+        Picture section = FiguresPart.Section(SheetFiles.Input(recessed), results, results.Cylinders[0])!;
+
+        Assert.Equal(1.5, results.Cylinders[0].PistonToHead!.Value, 1e-9);
+        Polygon gasket = Assert.Single(section.Shapes.OfType<Polygon>(), polygon => polygon.Grey == 0.25);
+        double faceYMm = gasket.Corners.Min(corner => corner.YMm), scale = (gasket.Corners.Max(corner => corner.YMm) - faceYMm) / 1.2;
+        Label letter = Assert.Single(section.Shapes.OfType<Label>(), label => label.Text == "C");
+        Line dimension = section.Shapes.OfType<Line>().First(line => line.From.XMm == line.To.XMm && line.Pen == Pen.Fine && Math.Abs(line.From.XMm - letter.At.XMm) < 2.0);
+        Assert.Equal(faceYMm - (0.8 * scale), dimension.From.YMm, 1e-9);
+        Assert.Equal(1.5 * scale, dimension.To.YMm - dimension.From.YMm, 1e-9);
+    }
+
     // By these figures the crown lies 1.6 mm above the head's face, and the drawing says so rather than turn the gap about.
     [Fact]
     public void A_piston_that_meets_the_head_is_drawn_into_it_and_dimensioned_from_the_face_up()
