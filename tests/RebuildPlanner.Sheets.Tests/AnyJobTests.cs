@@ -72,7 +72,7 @@ public class AnyJobTests
                 Assert.All(Tables(sheet.Blocks), AssertFilled);
             }
         },
-        iter: 25);
+        iter: 20);
 
     [Fact]
     public void Text_of_any_job_keeps_within_the_margins() => Asked.Sample(
@@ -82,7 +82,7 @@ public class AnyJobTests
             AssertWithinMargins(BuildSheet.Of(input, StageResults.Of(asked.Job, asked.Stage)));
             AssertWithinMargins(MeasuringForm.Of(input, asked.Stage, Round.Of(asked.Job.Engine)));
         },
-        iter: 20, threads: 1);
+        iter: 15, threads: 1);
 
     [Fact]
     public void Any_job_reads_back_from_its_sheet_and_gives_the_same_bytes_again() => Asked.Sample(

@@ -40,6 +40,15 @@ public class MeasuringFormTests
     }
 
     [Fact]
+    public void Lengths_are_asked_in_the_shops_unit_and_volumes_as_every_burette_has_them()
+    {
+        string[] heads = [.. MeasuringForm.Of(SheetFiles.Input(VeeEight, Core.Quantities.UnitSystem.Inch), Stage.AsReceived, Round.Of(VeeEight.Engine)).Blocks.OfType<Heading>().Select(heading => heading.Text)];
+
+        Assert.Contains("bore, in", heads);
+        Assert.Contains("chamber, cm³", heads);
+    }
+
+    [Fact]
     public void The_shops_gauges_are_on_it_with_room_for_more()
     {
         Table gauges = (Table)Form.Blocks[Form.Blocks.ToList().FindIndex(block => block is Heading { Text: "Gauges used" }) + 1];

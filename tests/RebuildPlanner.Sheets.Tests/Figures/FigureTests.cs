@@ -48,6 +48,72 @@ public class FigureTests
         Assert.Equal(10.0 * VanResults.Used(What.Deck, "1")!.Value.Value, piston.Corners.Min(corner => corner.YMm) - deckYMm, 1e-9);
     }
 
+    // What is drawn is measured off the drawing again: chamber and crown by volume, deck and pin offset by length, all at the scale written on it.
+    [Theory]
+    [MemberData(nameof(Samples))]
+    public void Chamber_crown_deck_and_pin_are_drawn_as_they_are(string sample)
+    {
+        Job job = SheetFiles.Sample(sample);
+        Results results = StageResults.Of(job, LastStage.Of(job));
+        foreach (CylinderResult cylinder in results.Cylinders.Where(cylinder => cylinder.ClearanceVolume is not null))
+        {
+            Picture section = FiguresPart.Section(SheetFiles.Input(job), results, cylinder)!;
+            string written = Assert.Single(section.Shapes.OfType<Label>(), label => label.Text.StartsWith("scale 1 : ", StringComparison.Ordinal)).Text;
+            double scale = 1.0 / double.Parse(written[10..], System.Globalization.CultureInfo.InvariantCulture), bore = cylinder.Bore!.Value;
+            double Used(What what) => results.Used(what, cylinder.Cylinder)?.Value.Value ?? 0.0;
+
+            Polygon head = section.Shapes.OfType<Polygon>().First(polygon => polygon.Corners.Count == 8);
+            double faceYMm = head.Corners[2].YMm, roofYMm = head.Corners[4].YMm, deckYMm = faceYMm + (Used(What.GasketThickness) * scale);
+            Assert.Equal(cylinder.Chamber!.Value, 0.25 * Math.PI * bore * bore * (faceYMm - roofYMm) / scale, 1e-6); // mm³; the drawing's own rounding is a double's
+
+            Polygon piston = section.Shapes.OfType<Polygon>().First(polygon => polygon is { Corners.Count: 8, Grey: 0.9, Pen: not null });
+            Assert.Equal(Used(What.Deck), (piston.Corners[0].YMm - deckYMm) / scale, 1e-9);
+            double wellMm = (piston.Corners[3].XMm - piston.Corners[2].XMm) / scale, depthMm = (piston.Corners[2].YMm - piston.Corners[1].YMm) / scale;
+            Assert.Equal(cylinder.Crown!.Value, 0.25 * Math.PI * wellMm * wellMm * depthMm, 1e-6);
+
+            Circle path = Assert.Single(section.Shapes.OfType<Circle>(), circle => circle.Pen == Pen.Dashed);
+            Circle pin = section.Shapes.OfType<Circle>().Where(circle => circle.RadiusMm == 0.6).MinBy(circle => circle.Centre.YMm)!;
+            Assert.Equal(Used(What.PinOffset), (pin.Centre.XMm - path.Centre.XMm) / scale, 1e-9);
+        }
+    }
+
+    [Fact]
+    public void Each_dimension_says_its_own_figure_and_so_do_the_words_for_who_cannot_see_it()
+    {
+        Picture section = FiguresPart.Section(SheetFiles.Input(Van), VanResults, VanResults.Cylinders[0])!;
+
+        string[] upright = [.. section.Shapes.OfType<Label>().Where(label => label.Upright && label.Text.Length > 1).Select(label => label.Text).Order(StringComparer.Ordinal)];
+        Assert.Equal([$"rod {VanResults.Used(What.RodLength, "1")!.Written}", $"stroke {VanResults.Used(What.Stroke, "1")!.Written}"], upright);
+        Assert.All(upright, said => Assert.Contains(said, section.Alternative, StringComparison.Ordinal));
+        Label gap = Assert.Single(section.Shapes.OfType<Label>(), label => label.Text.StartsWith("C  ", StringComparison.Ordinal));
+        Assert.Contains(gap.Text[3..], section.Alternative, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void The_pin_stands_where_the_piston_of_that_cylinder_has_it()
+    {
+        Job job = SheetFiles.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "H" }, "engine": { "cylinders": 2, "stroke": "78 mm", "rodLength": "130 mm" },
+              "given": [ { "what": "bore", "value": "81 mm" } ],
+              "parts": { "pistons": [ { "id": "low", "compressionHeight": "30 mm" }, { "id": "high", "compressionHeight": "40 mm" } ] },
+              "fitted": [ { "stage": "as received", "piston": "low", "cylinder": "1" }, { "stage": "as received", "piston": "high", "cylinder": "2" } ] }
+            """);
+        Results results = StageResults.Of(job, Stage.AsReceived);
+
+        double[] pins =
+        [
+            .. results.Cylinders.Select(cylinder =>
+            {
+                Shape[] shapes = [.. FiguresPart.Section(SheetFiles.Input(job), results, cylinder)!.Shapes];
+                double crownYMm = shapes.OfType<Polygon>().First(polygon => polygon is { Grey: 0.9, Corners.Count: 8 }).Corners[0].YMm;
+                return shapes.OfType<Circle>().Where(circle => circle.RadiusMm == 0.6).Min(circle => circle.Centre.YMm) - crownYMm;
+            }),
+        ];
+
+        Assert.Equal([15.0, 20.0], pins, (a, b) => Math.Abs(a - b) < 1e-9); // at 1 : 2
+    }
+
     [Fact]
     public void The_section_is_of_the_cylinder_with_the_least_gap()
     {
@@ -95,6 +161,43 @@ public class FigureTests
         // Chamber, deck, crown and top land are white boxes alike (the latter hatched): four a row, in that order.
         Assert.Equal(VanResults.Cylinders[3].Chamber!.Value * perMm3, chambers[12], 1e-9);
         Assert.Equal(VanResults.Cylinders[3].Crown!.Value * perMm3, chambers[14], 1e-9);
+    }
+
+    // The figures along the axis say what a length is worth; chamber and clearance volume are held to that.
+    [Theory]
+    [InlineData(UnitSystem.Metric, 1000.0)]
+    [InlineData(UnitSystem.Inch, 16387.064)]
+    public void The_axis_counts_the_unit_printed(UnitSystem units, double mm3PerUnit)
+    {
+        Picture bars = VolumeBars.Draw(VanResults, units, SheetWording.Original)!;
+
+        (double XMm, double Number)[] ticks =
+        [
+            .. bars.Shapes.OfType<Label>().Where(label => label.Anchor == Anchor.Middle)
+                .Select(label => (label.At.XMm, double.Parse(label.Text, System.Globalization.CultureInfo.InvariantCulture))),
+        ];
+        Assert.True(ticks.Length >= 4);
+        double zeroXMm = ticks.Single(tick => tick.Number == 0.0).XMm, perUnit = (ticks[^1].XMm - ticks[0].XMm) / (ticks[^1].Number - ticks[0].Number);
+        Assert.All(ticks, tick => Assert.Equal(zeroXMm + (tick.Number * perUnit), tick.XMm, 1e-9));
+        Assert.Equal(VanResults.Cylinders[0].Chamber!.Value / mm3PerUnit * perUnit, Lengths(bars, 1.0, skipLegend: 4)[0], 1e-9);
+        Line[] marks = [.. bars.Shapes.OfType<Line>().Where(line => line.Pen.WidthMm == 0.7)];
+        Assert.Equal(VanResults.Cylinders.Select(cylinder => zeroXMm + (cylinder.ClearanceVolume!.Value / mm3PerUnit * perUnit)), marks.Select(mark => mark.From.XMm), (a, b) => Math.Abs(a - b) < 1e-9);
+    }
+
+    // Deck and crown are hatched, one this way and one that, as no colour would tell them apart in a copy.
+    [Fact]
+    public void Deck_and_crown_are_hatched_opposite_ways()
+    {
+        Shape[] legend = [.. VolumeBars.Draw(VanResults, UnitSystem.Metric, SheetWording.Original)!.Shapes];
+
+        int Sign(string part)
+        {
+            int at = Array.FindIndex(legend, shape => shape is Label label && label.Text == part);
+            Line line = Assert.IsType<Line>(legend[at - 1]);
+            return Math.Sign((line.To.YMm - line.From.YMm) * (line.To.XMm - line.From.XMm));
+        }
+
+        Assert.Equal((-1, 1), (Sign("deck"), Sign("crown"))); // y runs down: the deck's rise to the right
     }
 
     [Fact]

@@ -5,6 +5,7 @@ using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
 using RebuildPlanner.Sheets.Build;
+using RebuildPlanner.Sheets.Drawing;
 using RebuildPlanner.Sheets.Pages;
 using RebuildPlanner.Sheets.Pdf;
 using RebuildPlanner.Sheets.Templates;
@@ -50,6 +51,7 @@ public class PdfSheetTests
         Assert.True(pdf.Advanced.TryGetEmbeddedFiles(out IReadOnlyList<EmbeddedFile>? files));
         Assert.Equal(BuildSheet.JobFileName, Assert.Single(files!).Name);
         Assert.Equal(job, JobFileReader.Read(files![0].Memory.Span).Job);
+        Assert.Matches($@"/Size {JobFileWriter.Write(job).Length}\b", Encoding.Latin1.GetString(Written(SheetFiles.BuildSheetOf(job))));
     }
 
     [Fact]
@@ -70,6 +72,42 @@ public class PdfSheetTests
 
         Assert.Equal(Written(sheet), Written(sheet));
         Assert.NotEqual(Written(sheet), Written(sheet with { Date = SheetFiles.Date.AddDays(1) }));
+    }
+
+    // Programs that keep many files tell them apart by this.
+    [Fact]
+    public void Another_sheet_has_another_identity()
+    {
+        static string Identity(Sheet sheet) => System.Text.RegularExpressions.Regex.Match(Encoding.Latin1.GetString(Written(sheet)), @"/ID\s*\[[^\]]*\]").Value;
+
+        Sheet one = SheetFiles.Of(new Paragraph("one")), two = SheetFiles.Of(new Paragraph("two"));
+
+        Assert.NotEmpty(Identity(one));
+        Assert.NotEqual(Identity(one), Identity(two));
+    }
+
+    [Fact]
+    public void A_table_over_pages_is_one_to_who_cannot_see_it_with_its_head_once()
+    {
+        string text = Encoding.Latin1.GetString(Written(SheetFiles.Of(new Table([new Column("HEAD", IsText: true)], [.. Enumerable.Repeat<IReadOnlyList<string>>(["row"], 120)]))));
+
+        Assert.True(Count(text, "/Type/Page\n") + Count(text, "/Type/Page/") >= 3);
+        Assert.Equal((1, 121, 1), (Count(text, "/S/Table/"), Count(text, "/S/TR/"), Count(text, "/S/TH/")));
+    }
+
+    // Read back by another library: how wide a circle is, which way a label reads, whether a line is dashed.
+    [Fact]
+    public void Shapes_are_drawn_as_large_as_they_are()
+    {
+        Picture picture = new(60.0, 60.0, "P", "A picture.", [new Circle(new(30.0, 30.0), 12.0, Pen.Outline), new Line(new(0.0, 5.0), new(50.0, 5.0), Pen.Dashed), new Label(new(10.0, 50.0), "UP", 9.0, Upright: true)]);
+        using PdfDocument pdf = PdfDocument.Open(Written(SheetFiles.Of(new Illustration(picture, "")) with { Foot = "", PageOf = "" }));
+        Page page = pdf.GetPage(1);
+
+        const double PtPerMm = 72.0 / 25.4;
+        double[] widths = [.. page.Paths.Select(path => path.GetBoundingRectangle()).OfType<UglyToad.PdfPig.Core.PdfRectangle>().Where(box => Math.Abs(box.Width - box.Height) < 0.1).Select(box => box.Width)];
+        Assert.Contains(widths, width => Math.Abs(width - (24.0 * PtPerMm)) < 0.1); // four curves of Bézier stand for a circle, a tenth of a point is more than they stray
+        Assert.Equal([TextOrientation.Rotate270, TextOrientation.Rotate270], page.Letters.Where(letter => letter.Value is "U" or "P").Select(letter => letter.TextOrientation));
+        Assert.Contains(page.Paths, path => path.LineDashPattern is { } dashes && dashes.Array.Any(dash => Math.Abs(dash - (1.2 * PtPerMm)) < 0.01));
     }
 
     [Theory]
@@ -103,6 +141,7 @@ public class PdfSheetTests
         Assert.True(pdf.TryGetBookmarks(out Bookmarks? bookmarks));
         BookmarkNode[] nodes = [.. bookmarks!.GetNodes()];
         Assert.Equal(sheet.Blocks.OfType<Heading>().Select(heading => heading.Text), nodes.Select(node => node.Title));
+        Assert.Equal(sheet.Blocks.OfType<Heading>().Select(heading => heading.Level - 1), nodes.Select(node => node.Level));
         Assert.All(nodes, node => Assert.Contains(Squeezed(node.Title), Squeezed(pdf.GetPage(((DocumentBookmarkNode)node).PageNumber).Text), StringComparison.Ordinal));
     }
 
