@@ -13,6 +13,7 @@ using RebuildPlanner.Tests.Shared;
 using UglyToad.PdfPig;
 using UglyToad.PdfPig.Content;
 using UglyToad.PdfPig.Outline;
+using UglyToad.PdfPig.Tokens;
 
 namespace RebuildPlanner.Sheets.Tests.Pdf;
 
@@ -161,7 +162,14 @@ public class PdfSheetTests
         Assert.Equal(sheet.Blocks.Count(block => block is Table or Facts), Count(text, "/S/Table/"));
         Assert.Equal(sheet.Blocks.OfType<Table>().Sum(table => table.Rows.Count + 1), Count(text, "/S/TR/") - FactRows(text, sheet));
         Assert.Equal(sheet.Blocks.OfType<Illustration>().Count(), Count(text, "/S/Figure/"));
-        Assert.Equal(sheet.Blocks.OfType<Illustration>().Count(), Count(text, "/Alt(") + Count(text, "/Alt<"));
+        using PdfDocument pdf = PdfDocument.Open(Written(sheet));
+        string[] alternatives =
+        [
+            .. pdf.Structure.CrossReferenceTable.ObjectOffsets.Keys.Select(key => pdf.Structure.GetObject(key).Data).OfType<DictionaryToken>()
+                .Where(element => element.Data.TryGetValue("S", out IToken? kind) && kind is NameToken { Data: "Figure" })
+                .Select(element => element.Data.TryGetValue("Alt", out IToken? words) && words is IDataToken<string> said ? said.Data : ""),
+        ];
+        Assert.Equal(sheet.Blocks.OfType<Illustration>().Select(figure => figure.Picture.Alternative).Order(StringComparer.Ordinal), alternatives.Order(StringComparer.Ordinal));
     }
 
     [Theory]
