@@ -27,7 +27,8 @@ public class SvgTests
         XElement box = root.Elements(Svg + "polygon").Last();
         Assert.Equal("5,6 7,6 7,8 5,8", box.Attribute("points")!.Value);
         Assert.Equal("#808080", box.Attribute("fill")!.Value);
-        Assert.Equal("#000000", root.Element(Svg + "circle")!.Attribute("fill")!.Value);
+        XElement circle = root.Element(Svg + "circle")!;
+        Assert.Equal(["9", "10", "2", "#000000"], new[] { "cx", "cy", "r", "fill" }.Select(name => circle.Attribute(name)!.Value));
         XElement text = root.Element(Svg + "text")!;
         Assert.Equal(("Ø 84 & <more>", "end", "rotate(-90 11 12)"), (text.Value, text.Attribute("text-anchor")!.Value, text.Attribute("transform")!.Value));
         Assert.Equal(7.2 * 25.4 / 72.0, double.Parse(text.Attribute("font-size")!.Value, CultureInfo.InvariantCulture), 1e-9); // 1 pt is 1/72 in
