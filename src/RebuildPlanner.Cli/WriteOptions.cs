@@ -34,12 +34,15 @@ internal sealed class WriteOptions
         new(parsed.GetValue(_key) ?? NewKey(terminal), kind, body, terminal.Now(), parsed.GetValue(_by));
 
     /// <summary>A key of its own; those written later come later in order.</summary>
-    /// <remarks>The millisecond in ten letters and four by lot, in an alphabet without l, o, u and z: short enough to be typed, and to be told apart by eye.</remarks>
+    /// <remarks>
+    /// The millisecond in ten letters and six by lot (of a hundred in one millisecond two are alike once in some hundred thousand times), in an
+    /// alphabet without l, o, u and z: short enough to be typed, and to be told apart by eye.
+    /// </remarks>
     public static string NewKey(Terminal terminal)
     {
         const string Letters = "0123456789abcdefghijkmnpqrstvwxy";
-        const int TimeLetters = 10, Base = 32;
-        Span<char> key = stackalloc char[TimeLetters + 4];
+        const int TimeLetters = 10, LotLetters = 6, Base = 32;
+        Span<char> key = stackalloc char[TimeLetters + LotLetters];
         long milliseconds = terminal.Now().ToUnixTimeMilliseconds();
         for (int letter = TimeLetters - 1; letter >= 0; letter--)
         {
@@ -47,7 +50,8 @@ internal sealed class WriteOptions
             milliseconds /= Base;
         }
 
-        System.Security.Cryptography.RandomNumberGenerator.GetItems(Letters, key[TimeLetters..]);
+        // A key is no secret, and loading a library of secrets for it would cost as much as the write.
+        Random.Shared.GetItems(Letters, key[TimeLetters..]);
         return key.ToString();
     }
 
