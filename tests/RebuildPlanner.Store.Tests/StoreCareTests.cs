@@ -182,6 +182,34 @@ public sealed class StoreCareTests : IDisposable
         Assert.Contains("another program has been writing", problem.Message, StringComparison.Ordinal);
     }
 
+    [Fact]
+    public void A_full_disk_is_told_and_nothing_is_half_written()
+    {
+        using JobStore store = Filled();
+        IReadOnlyList<Entry> before = store.Entries("2026-041")!;
+        long pages = Sql.Scalar(store.Connection, "PRAGMA page_count");
+        Sql.Run(store.Connection, $"PRAGMA max_page_count = {pages}"); // SQLite's own way to stand on a full disk
+
+        StoreException problem = Assert.Throws<StoreException>(() => store.Append(
+            "2026-041", StoreFiles.Add(StoreFiles.Reading("small", "88 mm"), new Entry("large", EntryKind.Note, $"\"{new string('x', 200_000)}\"", StoreFiles.When))));
+
+        Assert.Contains("the disk is full. Nothing was written", problem.Message, StringComparison.Ordinal);
+        Assert.Equal(before, store.Entries("2026-041"));
+        Assert.Empty(StoreCare.Check(store, out _));
+    }
+
+    [Fact]
+    public void A_store_that_may_only_be_read_is_read_and_not_written()
+    {
+        using JobStore store = Filled();
+        Sql.Run(store.Connection, "PRAGMA query_only = ON");
+
+        StoreException problem = Assert.Throws<StoreException>(() => store.Append("2026-041", StoreFiles.Add(StoreFiles.Reading("r", "88 mm"))));
+
+        Assert.Contains("may be read but not written", problem.Message, StringComparison.Ordinal);
+        Assert.NotNull(store.Entries("2026-041"));
+    }
+
     private JobStore Filled()
     {
         JobStore store = _files.Open();
