@@ -14,27 +14,18 @@ internal static class EntryCommand
     /// <param name="kind">What the entry says.</param>
     /// <param name="fields">The element's fields.</param>
     /// <param name="terminal">Where output goes.</param>
-    public static Command Make(string name, string description, string example, EntryKind kind, IReadOnlyList<EntryField> fields, Terminal terminal)
+    /// <param name="body">The element, where it is not an object of its fields.</param>
+    public static Command Make(
+        string name, string description, string example, EntryKind kind, IReadOnlyList<EntryField> fields, Terminal terminal, Func<ParseResult, string>? body = null)
     {
         ExampleCommand command = new(name, description, example);
-        foreach (EntryField field in fields)
-        {
-            if (field.Symbol is Argument argument)
-            {
-                command.Arguments.Add(argument);
-            }
-            else
-            {
-                command.Options.Add((Option)field.Symbol);
-            }
-        }
-
+        EntryField.AddTo(command, fields);
         WriteOptions write = new();
         write.AddTo(command);
         command.SetAction(parsed =>
         {
             using JobStore store = write.Open(parsed, terminal);
-            Entry entry = write.Entry(kind, EntryField.Body(fields, parsed), parsed, terminal);
+            Entry entry = write.Entry(kind, body?.Invoke(parsed) ?? EntryField.Body(fields, parsed), parsed, terminal);
             if (WriteOptions.Write(store, write.Number(parsed), [entry], name, terminal) is null)
             {
                 return ExitCode.Wrong;

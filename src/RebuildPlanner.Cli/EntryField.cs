@@ -1,7 +1,5 @@
 using System.CommandLine;
 using System.Globalization;
-using System.Text;
-using System.Text.Encodings.Web;
 using System.Text.Json;
 
 namespace RebuildPlanner.Cli;
@@ -12,8 +10,6 @@ namespace RebuildPlanner.Cli;
 /// <param name="Write">Writes it where it was given.</param>
 internal sealed record EntryField(string Json, Symbol Symbol, Action<ParseResult, Utf8JsonWriter> Write)
 {
-    private static readonly JsonWriterOptions _relaxed = new() { Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
-
     /// <summary>Text, a quantity too: it is kept as typed and judged by the job file's reader.</summary>
     public static EntryField Text(string json, string option, string description, string helpName)
     {
@@ -102,21 +98,31 @@ internal sealed record EntryField(string Json, Symbol Symbol, Action<ParseResult
     /// <summary>The stage.</summary>
     public static EntryField Stage() => Text("stage", "--stage", "before, \"as received\", planned or \"as machined\".", "stage");
 
-    /// <summary>The element the fields make.</summary>
-    public static string Body(IEnumerable<EntryField> fields, ParseResult parsed)
+    /// <summary>Adds fields to a command, as arguments or options.</summary>
+    public static void AddTo(Command command, IEnumerable<EntryField> fields)
     {
-        using MemoryStream stream = new();
-        using (Utf8JsonWriter body = new(stream, _relaxed))
+        foreach (EntryField field in fields)
         {
-            body.WriteStartObject();
-            foreach (EntryField field in fields)
+            if (field.Symbol is Argument argument)
             {
-                field.Write(parsed, body);
+                command.Arguments.Add(argument);
             }
+            else
+            {
+                command.Options.Add((Option)field.Symbol);
+            }
+        }
+    }
 
-            body.WriteEndObject();
+    /// <summary>The element the fields make.</summary>
+    public static string Body(IEnumerable<EntryField> fields, ParseResult parsed) => JsonText.Write(body =>
+    {
+        body.WriteStartObject();
+        foreach (EntryField field in fields)
+        {
+            field.Write(parsed, body);
         }
 
-        return Encoding.UTF8.GetString(stream.ToArray());
-    }
+        body.WriteEndObject();
+    });
 }

@@ -1,7 +1,6 @@
 using System.CommandLine;
 using System.Text;
 using RebuildPlanner.Core.JobFile;
-using RebuildPlanner.Store;
 
 namespace RebuildPlanner.Cli;
 
@@ -16,35 +15,14 @@ public static class ExportCommand
     /// <summary>Makes the command.</summary>
     public static Command Make(Terminal terminal)
     {
-        Argument<string> number = new("job") { Description = "The job's number." };
         Option<string> output = new("--out") { Description = "The file to write; else it is printed.", HelpName = "job.json" };
-        StoreOption storeOption = new();
-        ExampleCommand command = new("export", "Gives a job of the store as a job file.", Example) { number, output };
-        storeOption.AddTo(command);
-        command.SetAction(parsed =>
-        {
-            using JobStore store = storeOption.Open(parsed, terminal);
-            string name = parsed.GetValue(number)!;
-            if (JobSource.Find(store, name, terminal) is not { } entries)
-            {
-                return ExitCode.Wrong;
-            }
-
-            byte[] file = JobFileWriter.Write(JobSource.Folded(name, entries));
-            if (parsed.GetValue(output) is not { } path)
-            {
-                terminal.Output.Write(Encoding.UTF8.GetString(file));
-                return ExitCode.Done;
-            }
-
-            if (!OutputFile.Write(path, file, "{"u8, terminal.Error))
-            {
-                return ExitCode.Wrong;
-            }
-
-            terminal.Output.WriteLine(path);
-            return ExitCode.Done;
-        });
+        ExampleCommand command = new("export", "Gives a job of the store as a job file.", Example) { output };
+        StoredJob stored = new();
+        stored.AddTo(command);
+        command.SetAction(parsed => stored.Read(parsed, terminal) is { } found
+            && OutputFile.WriteOrPrint(Encoding.UTF8.GetString(JobFileWriter.Write(found.Job)), parsed.GetValue(output), "{"u8, terminal)
+            ? ExitCode.Done
+            : ExitCode.Wrong);
         return command;
     }
 }

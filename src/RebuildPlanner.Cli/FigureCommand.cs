@@ -1,5 +1,4 @@
 using System.CommandLine;
-using System.Text;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Sheets.Build;
 using RebuildPlanner.Sheets.Drawing;
@@ -58,28 +57,11 @@ public static class FigureCommand
             }
 
             string text = parsed.GetValue(svg) ? Svg.Write(picture) : $"{picture.Title}\n{picture.Alternative}\n";
-            return Write(text, parsed.GetValue(output), terminal) ? ExitCode.Done : ExitCode.Wrong;
+            return OutputFile.WriteOrPrint(text, parsed.GetValue(output), "<svg"u8, terminal) ? ExitCode.Done : ExitCode.Wrong;
         });
         return command;
     }
 
     private static CylinderResult? Chosen(Results results, string? label) =>
         label is null ? CylinderSection.Choose(results) : results.Cylinders.First(cylinder => cylinder.Cylinder == label);
-
-    private static bool Write(string text, string? path, Terminal terminal)
-    {
-        if (path is null)
-        {
-            terminal.Output.Write(text);
-            return true;
-        }
-
-        if (!OutputFile.Write(path, Encoding.UTF8.GetBytes(text), "<svg"u8, terminal.Error))
-        {
-            return false;
-        }
-
-        terminal.Output.WriteLine(path);
-        return true;
-    }
 }

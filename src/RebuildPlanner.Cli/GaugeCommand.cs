@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.Text;
-using System.Text.Json;
 using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
@@ -25,7 +24,7 @@ public static class GaugeCommand
         Argument<string?> name = new("name") { Description = "What the shop calls it.", Arity = ArgumentArity.ZeroOrOne };
         EntryField[] fields =
         [
-            EntryField.Text("kind", "--kind", "bore gauge, micrometer, dial gauge, burette, …", "words"),
+            new("id", name, (parsed, body) => body.WriteString("id", parsed.GetValue(name)!)), EntryField.Text("kind", "--kind", "bore gauge, micrometer, dial gauge, burette, …", "words"),
             EntryField.Text("resolution", "--resolution", "The least step that can be read.", "figure"),
             EntryField.Text("limitOfError", "--limit", "How far it may be off, either way.", "figure"),
             EntryField.Text("setWith", "--set-with", "The gauge it is set with.", "name"), EntryField.Text("calibrated", "--calibrated", "The day of calibration.", "date"),
@@ -35,8 +34,8 @@ public static class GaugeCommand
         ];
         Option<string> by = new("--by") { Description = "Who writes this.", HelpName = "name" };
         StoreOption storeOption = new();
-        ExampleCommand command = new("gauge", "Adds a gauge to the shop's, or lists them.", Example) { name, by };
-        Array.ForEach(fields, field => command.Options.Add((Option)field.Symbol));
+        ExampleCommand command = new("gauge", "Adds a gauge to the shop's, or lists them.", Example) { by };
+        EntryField.AddTo(command, fields);
         storeOption.AddTo(command);
         command.SetAction(parsed =>
         {
@@ -51,10 +50,8 @@ public static class GaugeCommand
                 return ExitCode.Done;
             }
 
-            string quoted = JsonEncodedText.Encode(id, System.Text.Encodings.Web.JavaScriptEncoder.UnsafeRelaxedJsonEscaping).ToString();
-            string rest = EntryField.Body(fields, parsed)[1..];
-            string body = $"{{\"id\":\"{quoted}\"{(rest == "}" ? "" : ",")}{rest}";
-            if (!IsRight(body, store, terminal))
+            string body = EntryField.Body(fields, parsed);
+            if (!IsRight(id, body, store, terminal))
             {
                 return ExitCode.Wrong;
             }
@@ -75,18 +72,15 @@ public static class GaugeCommand
         for (string? next = name; next is not null && seen.Add(next) && shop.TryGetValue(next, out string? body);)
         {
             chain.Insert(0, body);
-            using JsonDocument gauge = JsonDocument.Parse(body);
-            next = gauge.RootElement.TryGetProperty("setWith", out JsonElement setter) ? setter.GetString() : null;
+            next = JsonText.Field(body, "setWith");
         }
 
         return chain;
     }
 
     // The job file's reader is the judge: a job of nothing but the shop's gauges, this one among them.
-    private static bool IsRight(string body, JobStore store, Terminal terminal)
+    private static bool IsRight(string id, string body, JobStore store, Terminal terminal)
     {
-        using JsonDocument gauge = JsonDocument.Parse(body);
-        string id = gauge.RootElement.GetProperty("id").GetString()!;
         string all = string.Join(",", store.Gauges().Where(known => known.Name != id).Select(known => known.Body).Append(body));
         (Job? job, IReadOnlyList<Fault> faults) = JobFileReader.Read(Encoding.UTF8.GetBytes(
             $$"""{"format":"rebuild-planner-job","version":1,"job":{"number":"gauges"},"engine":{"cylinders":1},"gauges":[{{all}}]}"""));

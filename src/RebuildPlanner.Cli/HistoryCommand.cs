@@ -1,9 +1,7 @@
 using System.CommandLine;
 using System.Globalization;
-using System.Text.Json;
 using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Core.Measuring;
-using RebuildPlanner.Store;
 
 namespace RebuildPlanner.Cli;
 
@@ -18,12 +16,11 @@ public static class HistoryCommand
     /// <summary>Makes the command.</summary>
     public static Command Make(Terminal terminal)
     {
-        Argument<string> number = new("job") { Description = "The job's number." };
         Argument<string?> what = new("what") { Description = "Of one thing only, such as chamber.", Arity = ArgumentArity.ZeroOrOne };
         Option<string> cylinder = new("--cylinder") { Description = "Of one cylinder only.", HelpName = "label" };
-        StoreOption storeOption = new();
-        ExampleCommand command = new("history", "Shows everything ever written into a job, struck or not.", Example) { number, what, cylinder };
-        storeOption.AddTo(command);
+        ExampleCommand command = new("history", "Shows everything ever written into a job, struck or not.", Example) { what, cylinder };
+        StoredJob stored = new();
+        stored.AddTo(command);
         command.SetAction(parsed =>
         {
             if (parsed.GetValue(what) is { } word && WhatTable.Find(word) is null)
@@ -33,13 +30,12 @@ public static class HistoryCommand
                 return ExitCode.Wrong;
             }
 
-            using JobStore store = storeOption.Open(parsed, terminal);
-            if (JobSource.Find(store, parsed.GetValue(number)!, terminal) is not { } entries)
+            if (stored.Read(parsed, terminal) is not { Entries: { } entries })
             {
                 return ExitCode.Wrong;
             }
 
-            Dictionary<string, string> struck = JobVerbs.Struck(entries);
+            Dictionary<string, string> struck = JobFold.Struck(entries);
             foreach (Entry entry in entries.Where(entry => IsAbout(entry, entries, parsed.GetValue(what), parsed.GetValue(cylinder))))
             {
                 string at = entry.At.LocalDateTime.ToString("yyyy-MM-dd HH:mm", CultureInfo.InvariantCulture);
@@ -60,21 +56,13 @@ public static class HistoryCommand
             return true;
         }
 
-        using JsonDocument body = JsonDocument.Parse(entry.Body);
-        if (body.RootElement.ValueKind != JsonValueKind.Object)
-        {
-            return false;
-        }
-
         // A strike is about what it strikes.
         if (entry.Kind == EntryKind.Strike)
         {
-            string key = body.RootElement.GetProperty("entry").GetString()!;
+            string? key = JsonText.Field(entry.Body, "entry");
             return entries.FirstOrDefault(other => other.Key == key && other.Kind != EntryKind.Strike) is { } other && IsAbout(other, entries, what, cylinder);
         }
 
-        return Is("what", what) && Is("cylinder", cylinder);
-
-        bool Is(string field, string? wanted) => wanted is null || (body.RootElement.TryGetProperty(field, out JsonElement value) && value.ValueKind == JsonValueKind.String && value.GetString() == wanted);
+        return (what is null || JsonText.Field(entry.Body, "what") == what) && (cylinder is null || JsonText.Field(entry.Body, "cylinder") == cylinder);
     }
 }

@@ -31,14 +31,26 @@ internal static class InputFile
     {
         foreach (Fault fault in faults)
         {
-            string place = fault.Path.Length == 0 ? "" : $"{fault.Path}: ";
-            string value = fault.Value is null ? "" : $"\"{fault.Value}\": ";
-            error.WriteLine($"{path}, line {fault.Line}: {place}{value}{fault.Message}");
+            Say($"{path}, line {fault.Line}", fault, error);
         }
 
-        if (faults.Count > 0)
+        Count(faults.Count, outcome, error);
+    }
+
+    /// <summary>Says one fault: where, what stood there, what would be right.</summary>
+    public static void Say(string where, Fault fault, TextWriter error)
+    {
+        string place = fault.Path.Length == 0 ? "" : $"{fault.Path}: ";
+        string value = fault.Value is null ? "" : $"\"{fault.Value}\": ";
+        error.WriteLine($"{where}: {place}{value}{fault.Message}");
+    }
+
+    /// <summary>Says how many faults there were, where there were any, and what came of them.</summary>
+    public static void Count(int faults, string outcome, TextWriter error)
+    {
+        if (faults > 0)
         {
-            error.WriteLine(faults.Count == 1 ? $"1 fault; {outcome}." : $"{faults.Count} faults; {outcome}.");
+            error.WriteLine(faults == 1 ? $"1 fault; {outcome}." : $"{faults} faults; {outcome}.");
         }
     }
 

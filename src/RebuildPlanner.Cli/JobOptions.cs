@@ -9,11 +9,12 @@ namespace RebuildPlanner.Cli;
 internal static class JobOptions
 {
     /// <summary>The stage.</summary>
-    public static Option<Stage?> Stage()
+    /// <param name="description">What it says where it is left out.</param>
+    public static Option<Stage?> Stage(string description = "before, \"as received\", planned or \"as machined\"; else the last stage with entries.")
     {
         Option<Stage?> stage = new("--stage")
         {
-            Description = "before, \"as received\", planned or \"as machined\"; else the last stage with entries.",
+            Description = description,
             HelpName = "stage",
             CustomParser = ParseStage,
         };

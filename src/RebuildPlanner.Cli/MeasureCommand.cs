@@ -45,13 +45,7 @@ public static class MeasureCommand
             }
 
             Job job = JobSource.Folded(number, entries);
-            Stage? asked = fields.Stage(parsed, terminal, out bool wrong);
-            if (wrong)
-            {
-                return ExitCode.Wrong;
-            }
-
-            Stage stage = asked ?? LastStage.Of(job);
+            Stage stage = fields.Stage(parsed) ?? LastStage.Of(job);
             if (parsed.GetValue(blank))
             {
                 terminal.Output.Write(ReadingList.Blank(job, stage));
@@ -60,7 +54,7 @@ public static class MeasureCommand
 
             return parsed.GetValue(csv) is { } path
                 ? ReadingList.Import(store, number, path, parsed, write, terminal)
-                : new MeasuringRound(store, number, stage, write.Entry(EntryKind.Reading, "{}", parsed, terminal).By, terminal).Run();
+                : new MeasuringRound(store, number, stage, write.By(parsed), terminal).Run();
         });
         return command;
     }

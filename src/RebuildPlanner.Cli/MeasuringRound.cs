@@ -1,5 +1,5 @@
 using System.Globalization;
-using System.Text.Json.Nodes;
+using System.Text.Json;
 using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Measuring;
@@ -19,11 +19,10 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
           q             stop here                           ?   this
         """;
 
-    private static readonly System.Text.Json.JsonSerializerOptions _relaxed = new() { Encoder = System.Text.Encodings.Web.JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
-
     private readonly Dictionary<What, string?> _gauges = [];
     private readonly Dictionary<string, string> _drops = [];
     private IReadOnlyList<Entry> _entries = [];
+    private IReadOnlyList<RoundPlace> _left = [];
     private Job _job = null!;
     private int _written;
 
@@ -31,12 +30,11 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
     public int Run()
     {
         Load(new WrittenJob(number, store.Entries(number)!, null));
-        IReadOnlyList<RoundPlace> round = Round.Of(_job.Engine);
         HashSet<RoundPlace> skipped = [];
         Say($"Job {number}, {StageWords.Of(stage)}. Enter leaves a place for later; ? shows what else can be typed.");
         Stack<RoundPlace> asked = [];
         RoundPlace? next = null;
-        while ((next ?? Next(round, skipped)) is { } place)
+        while ((next ?? _left.FirstOrDefault(left => !skipped.Contains(left))) is { } place)
         {
             next = null;
             switch (Ask(place))
@@ -71,13 +69,6 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
         Stop,
     }
 
-    private RoundPlace? Next(IReadOnlyList<RoundPlace> round, HashSet<RoundPlace> skipped)
-    {
-        // The round's own list where nothing was begun in another word; what is left is asked in that order.
-        HashSet<RoundPlace> left = [.. Round.Left(_job, stage)];
-        return round.Concat(left).FirstOrDefault(place => left.Contains(place) && !skipped.Contains(place));
-    }
-
     private Answer Ask(RoundPlace place)
     {
         WhatLine line = WhatTable.Line(place.What);
@@ -97,8 +88,7 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
             string unit = TypedReading.Unit(Step(_gauges[place.What]), line);
             Reading[] before = [.. _job.Readings.Where(reading => reading.What == place.What && reading.Place == place.Place && reading.Stage == stage && reading.Struck is null)];
             string read = before.Length == 0 ? LastValue(place) : $"; read {string.Join(", ", before.Select(Figure))}";
-            int left = Round.Left(_job, stage).Count;
-            string? typed = Prompt(string.Create(CultureInfo.InvariantCulture, $"[{left} left] {PlaceWords.Of(place)} ({unit}{(burette ? ", start end" : "")}{read}): "));
+            string? typed = Prompt(string.Create(CultureInfo.InvariantCulture, $"[{_left.Count} left] {PlaceWords.Of(place)} ({unit}{(burette ? ", start end" : "")}{read}): "));
             switch (typed)
             {
                 case null or "q":
@@ -136,36 +126,36 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
 
     private bool Record(RoundPlace place, IReadOnlyList<(string Name, string Value)> fields, Reading[] before)
     {
-        JsonObject body = new() { ["what"] = WhatWords.Of(place.What) };
-        foreach ((string name, string value) in PlaceWords.Fields(place.Place))
+        Entry reading = New(EntryKind.Reading, JsonText.Write(body =>
         {
-            body[name] = name == "clock" ? JsonNode.Parse(value) : value;
-        }
-
-        if (fields.Count > 2)
-        {
-            body["fills"] = new JsonArray([.. fields.Chunk(2).Select(fill => new JsonObject { ["from"] = fill[0].Value, ["to"] = fill[1].Value })]);
-        }
-        else
-        {
-            foreach ((string name, string value) in fields)
+            body.WriteStartObject();
+            body.WriteString("what", WhatWords.Of(place.What));
+            foreach ((string name, string value) in PlaceWords.Fields(place.Place))
             {
-                body[name] = value;
+                if (name == "clock")
+                {
+                    body.WriteNumber(name, place.Place.ClockHours!.Value);
+                }
+                else
+                {
+                    body.WriteString(name, value);
+                }
             }
-        }
 
-        if (place.Place.Cylinder is { } cylinder && WhatTable.Line(place.What).Keys.HasFlag(PlaceKeys.Drop))
-        {
-            body["drop"] = _drops[cylinder];
-        }
+            WriteFigure(body, fields);
+            if (place.Place.Cylinder is { } cylinder && WhatTable.Line(place.What).Keys.HasFlag(PlaceKeys.Drop))
+            {
+                body.WriteString("drop", _drops[cylinder]);
+            }
 
-        if (_gauges[place.What] is { } gauge)
-        {
-            body["gauge"] = gauge;
-        }
+            if (_gauges[place.What] is { } gauge)
+            {
+                body.WriteString("gauge", gauge);
+            }
 
-        body["stage"] = StageWords.Of(stage);
-        Entry reading = New(EntryKind.Reading, body.ToJsonString(_relaxed));
+            body.WriteString("stage", StageWords.Of(stage));
+            body.WriteEndObject();
+        }));
         if (Readings.Write(store, number, reading, terminal) is not { } written)
         {
             return false;
@@ -186,11 +176,44 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
         return true;
     }
 
+    // More than one fill stands in a list; one, or a plain figure, on the reading itself.
+    private static void WriteFigure(Utf8JsonWriter body, IReadOnlyList<(string Name, string Value)> fields)
+    {
+        bool several = fields.Count > 2;
+        if (several)
+        {
+            body.WriteStartArray("fills");
+        }
+
+        foreach ((string Name, string Value)[] fill in fields.Chunk(2))
+        {
+            if (several)
+            {
+                body.WriteStartObject();
+            }
+
+            foreach ((string name, string value) in fill)
+            {
+                body.WriteString(name, value);
+            }
+
+            if (several)
+            {
+                body.WriteEndObject();
+            }
+        }
+
+        if (several)
+        {
+            body.WriteEndArray();
+        }
+    }
+
     /// <summary>Read again, a place has a repeat; or the reading before was wrong, which is said with a reason.</summary>
     private void AskStrike(Reading before)
     {
         string? reason = Prompt($"  {Figure(before)} stands as a repeat; Enter keeps it, or write why it was wrong: ");
-        Entry? struck = _entries.LastOrDefault(entry => entry.Kind == EntryKind.Reading && (entry.Key == before.Id || entry.Body.Contains($"\"id\":\"{before.Id}\"", StringComparison.Ordinal)));
+        Entry? struck = _entries.LastOrDefault(entry => entry.Kind == EntryKind.Reading && JsonText.Field(entry.Body, "id") == before.Id);
         if (string.IsNullOrWhiteSpace(reason) || struck is null)
         {
             return;
@@ -267,8 +290,7 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
 
     private int Close()
     {
-        RoundPlace[] left = [.. Round.Left(_job, stage)];
-        Say(string.Create(CultureInfo.InvariantCulture, $"{_written} readings written. {(left.Length == 0 ? "Nothing is left to read." : $"{left.Length} places are left, {left.Count(place => place.ForRatio)} of them for ratio and gap.")}"));
+        Say(string.Create(CultureInfo.InvariantCulture, $"{_written} readings written. {(_left.Count == 0 ? "Nothing is left to read." : $"{_left.Count} places are left, {_left.Count(place => place.ForRatio)} of them for ratio and gap.")}"));
         return ExitCode.Done;
     }
 
@@ -280,7 +302,7 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
             return (own.Resolution ?? own.LimitOfError)?.Text;
         }
 
-        return store.Gauges().FirstOrDefault(known => known.Name == gauge).Body is { } body ? JsonNode.Parse(body)!["resolution"]?.GetValue<string>() : null;
+        return store.Gauges().FirstOrDefault(known => known.Name == gauge).Body is { } body ? JsonText.Field(body, "resolution") : null;
     }
 
     private string LastValue(RoundPlace place) =>
@@ -290,7 +312,7 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
 
     private Entry New(EntryKind kind, string body) => new(WriteOptions.NewKey(terminal), kind, body, terminal.Now(), by);
 
-    private void Load(WrittenJob written) => (_entries, _job) = (written.Entries, written.Job);
+    private void Load(WrittenJob written) => (_entries, _job, _left) = (written.Entries, written.Job, Round.Left(written.Job, stage));
 
     private string? Prompt(string text)
     {

@@ -1,3 +1,5 @@
+using System.Text;
+
 namespace RebuildPlanner.Cli;
 
 /// <summary>Writes a file whole or not at all: beside its place first, then put there in one step.</summary>
@@ -38,6 +40,30 @@ internal static class OutputFile
             Discard(beside);
             return false;
         }
+    }
+
+    /// <summary>Writes the file and says its path; false after the reason has been written.</summary>
+    public static bool WriteAndSay(string path, byte[] content, ReadOnlySpan<byte> kind, Terminal terminal)
+    {
+        if (!Write(path, content, kind, terminal.Error))
+        {
+            return false;
+        }
+
+        terminal.Output.WriteLine(path);
+        return true;
+    }
+
+    /// <summary>Writes text into the file, or prints it where none is named.</summary>
+    public static bool WriteOrPrint(string text, string? path, ReadOnlySpan<byte> kind, Terminal terminal)
+    {
+        if (path is not null)
+        {
+            return WriteAndSay(path, Encoding.UTF8.GetBytes(text), kind, terminal);
+        }
+
+        terminal.Output.Write(text);
+        return true;
     }
 
     private static bool StartsWith(string path, ReadOnlySpan<byte> kind)

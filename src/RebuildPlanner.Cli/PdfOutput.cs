@@ -30,14 +30,5 @@ internal static class PdfOutput
     }
 
     /// <summary>Writes a PDF as it is; false after the reason has been written.</summary>
-    public static bool Write(byte[] pdf, string path, Terminal terminal)
-    {
-        if (!OutputFile.Write(path, pdf, "%PDF-"u8, terminal.Error))
-        {
-            return false;
-        }
-
-        terminal.Output.WriteLine(path);
-        return true;
-    }
+    public static bool Write(byte[] pdf, string path, Terminal terminal) => OutputFile.WriteAndSay(path, pdf, "%PDF-"u8, terminal);
 }

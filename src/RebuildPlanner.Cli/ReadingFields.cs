@@ -1,7 +1,6 @@
 using System.CommandLine;
 using System.Text.Json;
 using RebuildPlanner.Core.Jobs;
-using RebuildPlanner.Core.Quantities;
 
 namespace RebuildPlanner.Cli;
 
@@ -13,7 +12,7 @@ internal sealed class ReadingFields
     private readonly Option<string> _from = new("--from") { Description = "A burette before the fill.", HelpName = "figure" };
     private readonly Option<string> _to = new("--to") { Description = "A burette after the fill.", HelpName = "figure" };
     private readonly Option<string[]> _fills = new("--fill") { Description = "A fill among several, start..end; the option before each.", HelpName = "start..end" };
-    private readonly Option<string> _stage = new("--stage") { Description = "before, \"as received\", planned or \"as machined\".", HelpName = "stage" };
+    private readonly Option<Stage?> _stage = JobOptions.Stage("before, \"as received\", planned or \"as machined\".");
     private readonly EntryField[] _rest =
     [
         .. EntryField.Place(), EntryField.Text("drop", "--drop", "How far the crown stands below the deck for a crown fill.", "figure"),
@@ -37,19 +36,7 @@ internal sealed class ReadingFields
     public bool IsOne(ParseResult parsed) => parsed.GetValue(_what) is not null;
 
     /// <summary>The stage asked for, or null for none.</summary>
-    public Stage? Stage(ParseResult parsed, Terminal terminal, out bool wrong)
-    {
-        string? typed = parsed.GetValue(_stage);
-        Stage? stage = typed is null ? null : StageWords.Find(typed);
-        wrong = typed is not null && stage is null;
-        if (wrong)
-        {
-            string? near = NearestWord.Of(typed!, StageWords.All);
-            terminal.Error.WriteLine($"--stage {typed}: there is no such stage{(near is null ? "." : $"; did you mean \"{near}\"?")}");
-        }
-
-        return stage;
-    }
+    public Stage? Stage(ParseResult parsed) => parsed.GetValue(_stage);
 
     /// <summary>The reading as the job file writes it, or null after the reason has been written.</summary>
     public string? Body(ParseResult parsed, Terminal terminal)
@@ -82,7 +69,7 @@ internal sealed class ReadingFields
                 body.WriteEndArray();
             }
         });
-        EntryField stage = new("stage", _stage, (_, body) => Write(body, "stage", parsed.GetValue(_stage)));
+        EntryField stage = new("stage", _stage, (_, body) => Write(body, "stage", parsed.GetValue(_stage) is { } at ? StageWords.Of(at) : null));
         return EntryField.Body([what, .. _rest[..8], figure, .. _rest[8..], stage], parsed);
     }
 

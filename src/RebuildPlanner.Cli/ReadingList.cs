@@ -1,11 +1,8 @@
 using System.CommandLine;
 using System.Globalization;
 using System.Text;
-using System.Text.Encodings.Web;
-using System.Text.Json;
 using nietras.SeparatedValues;
 using RebuildPlanner.Core.Entries;
-using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Store;
@@ -74,7 +71,7 @@ internal static class ReadingList
             }
         }
 
-        return readings.Count == 0 || IsWhole(store, number, readings, path, terminal) ? Write(store, number, readings, path, terminal) : ExitCode.Wrong;
+        return Write(store, number, readings, path, terminal);
     }
 
     private static int Write(JobStore store, string number, List<(int Line, Entry Entry)> readings, string path, Terminal terminal)
@@ -85,7 +82,10 @@ internal static class ReadingList
             return ExitCode.Done;
         }
 
-        if (Readings.Write(store, number, [.. readings.Select(reading => reading.Entry)], path, terminal) is not { } written)
+        // Every fault is told with the line it stands in.
+        Dictionary<string, int> lines = readings.ToDictionary(reading => reading.Entry.Key, reading => reading.Line);
+        string? Where(Entry entry) => lines.TryGetValue(entry.Key, out int line) ? $"{path}, line {line}" : null;
+        if (Readings.Write(store, number, [.. readings.Select(reading => reading.Entry)], path, terminal, Where) is not { } written)
         {
             return ExitCode.Wrong;
         }
@@ -94,60 +94,28 @@ internal static class ReadingList
         return Readings.Say(written, terminal);
     }
 
-    // Judged row by row first, so that every fault is told with the line it stands in.
-    private static bool IsWhole(JobStore store, string number, List<(int Line, Entry Entry)> readings, string path, Terminal terminal)
+    private static string Body(Dictionary<string, string> cells) => JsonText.Write(body =>
     {
-        if (JobSource.Find(store, number, terminal) is not { } before)
+        body.WriteStartObject();
+        foreach (string column in _columns.Where(cells.ContainsKey))
         {
-            return false;
-        }
-
-        int faults = 0;
-        foreach ((int line, Entry entry) in readings)
-        {
-            foreach (Fault fault in JobVerbs.Add([.. before, .. Readings.GaugesOf(store, before, [entry], terminal)], entry).Faults)
+            string cell = cells[column];
+            if (column == "torquePlate" && cell is "yes" or "no" or "true" or "false")
             {
-                faults++;
-                terminal.Error.WriteLine($"{path}, line {line}: {fault.Path}: {(fault.Value is null ? "" : $"\"{fault.Value}\": ")}{fault.Message}");
+                body.WriteBoolean(column, cell is "yes" or "true");
+            }
+            else if (column == "clock" && decimal.TryParse(cell, NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out decimal hours))
+            {
+                body.WriteNumber(column, hours);
+            }
+            else
+            {
+                body.WriteString(column, cell);
             }
         }
 
-        if (faults > 0)
-        {
-            terminal.Error.WriteLine(faults == 1 ? "1 fault; nothing was written." : $"{faults} faults; nothing was written.");
-        }
-
-        return faults == 0;
-    }
-
-    private static string Body(Dictionary<string, string> cells)
-    {
-        using MemoryStream stream = new();
-        using (Utf8JsonWriter body = new(stream, new JsonWriterOptions { Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping }))
-        {
-            body.WriteStartObject();
-            foreach (string column in _columns.Where(cells.ContainsKey))
-            {
-                string cell = cells[column];
-                if (column == "torquePlate" && cell is "yes" or "no" or "true" or "false")
-                {
-                    body.WriteBoolean(column, cell is "yes" or "true");
-                }
-                else if (column == "clock" && decimal.TryParse(cell, NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out decimal hours))
-                {
-                    body.WriteNumber(column, hours);
-                }
-                else
-                {
-                    body.WriteString(column, cell);
-                }
-            }
-
-            body.WriteEndObject();
-        }
-
-        return Encoding.UTF8.GetString(stream.ToArray());
-    }
+        body.WriteEndObject();
+    });
 
     private static string Quoted(string cell) =>
         cell.AsSpan().IndexOfAny(",\"\n") < 0 ? cell : $"\"{cell.Replace("\"", "\"\"", StringComparison.Ordinal)}\"";

@@ -1,6 +1,5 @@
 using System.Globalization;
 using System.Text.Json;
-using System.Text.Json.Nodes;
 using RebuildPlanner.Core.Cylinders;
 using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Core.Jobs;
@@ -13,17 +12,17 @@ namespace RebuildPlanner.Cli;
 /// <summary>Writes readings, with the shop's gauge they name, and says how the job stands after them.</summary>
 internal static class Readings
 {
-    private static readonly JsonSerializerOptions _relaxed = new() { Encoder = System.Text.Encodings.Web.JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
-
     /// <summary>Writes one reading; the job with it, or null after the reason has been written.</summary>
     public static WrittenJob? Write(JobStore store, string number, Entry reading, Terminal terminal) =>
         Write(store, number, [reading], "measure", terminal);
 
     /// <summary>Writes readings, all or none.</summary>
-    public static WrittenJob? Write(JobStore store, string number, IReadOnlyList<Entry> readings, string what, Terminal terminal)
+    /// <param name="what">What to call them in messages.</param>
+    /// <param name="where">What to call the one of a key, where each has a name of its own.</param>
+    public static WrittenJob? Write(JobStore store, string number, IReadOnlyList<Entry> readings, string what, Terminal terminal, Func<Entry, string?>? where = null)
     {
         Entry[] named = [.. readings.Select(WithId)];
-        return WriteOptions.Write(store, number, before => ([.. GaugesOf(store, before, named, terminal), .. named], null), what, terminal);
+        return WriteOptions.Write(store, number, before => ([.. GaugesOf(store, before, named, terminal), .. named], null), what, terminal, where: where);
     }
 
     /// <summary>Says what was written last, the spread of chambers so far, and what is left.</summary>
@@ -68,20 +67,33 @@ internal static class Readings
     // A reading without an id could not be told from another when the job comes back from elsewhere.
     private static Entry WithId(Entry reading)
     {
-        JsonObject body = JsonNode.Parse(reading.Body)!.AsObject();
-        return body.ContainsKey("id") ? reading : reading with { Body = new JsonObject([new("id", reading.Key), .. body.Select(field => new KeyValuePair<string, JsonNode?>(field.Key, field.Value?.DeepClone()))]).ToJsonString(_relaxed) };
+        using JsonDocument body = JsonDocument.Parse(reading.Body);
+        return body.RootElement.TryGetProperty("id", out _) ? reading : reading with
+        {
+            Body = JsonText.Write(json =>
+            {
+                json.WriteStartObject();
+                json.WriteString("id", reading.Key);
+                foreach (JsonProperty field in body.RootElement.EnumerateObject())
+                {
+                    field.WriteTo(json);
+                }
+
+                json.WriteEndObject();
+            }),
+        };
     }
 
     /// <summary>The shop's gauges that readings name and the job has no copy of yet.</summary>
-    public static List<Entry> GaugesOf(JobStore store, IReadOnlyList<Entry> before, IReadOnlyList<Entry> readings, Terminal terminal)
+    private static List<Entry> GaugesOf(JobStore store, IReadOnlyList<Entry> before, IReadOnlyList<Entry> readings, Terminal terminal)
     {
-        HashSet<string> known = [.. before.Where(entry => entry.Kind == EntryKind.Gauge).Select(entry => Field(entry.Body, "id")).OfType<string>()];
+        HashSet<string> known = [.. before.Where(entry => entry.Kind == EntryKind.Gauge).Select(entry => JsonText.Field(entry.Body, "id")).OfType<string>()];
         List<Entry> copied = [];
-        foreach (string name in readings.Select(reading => Field(reading.Body, "gauge")).OfType<string>().Distinct())
+        foreach (string name in readings.Select(reading => JsonText.Field(reading.Body, "gauge")).OfType<string>().Distinct())
         {
             foreach (string body in known.Contains(name) ? [] : GaugeCommand.WithSetters(store, name))
             {
-                if (known.Add(Field(body, "id")!))
+                if (known.Add(JsonText.Field(body, "id")!))
                 {
                     copied.Add(new Entry(WriteOptions.NewKey(terminal), EntryKind.Gauge, body, terminal.Now()));
                 }
@@ -89,11 +101,5 @@ internal static class Readings
         }
 
         return copied;
-    }
-
-    private static string? Field(string body, string name)
-    {
-        using JsonDocument document = JsonDocument.Parse(body);
-        return document.RootElement.TryGetProperty(name, out JsonElement value) && value.ValueKind == JsonValueKind.String ? value.GetString() : null;
     }
 }

@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.Globalization;
-using System.Text.Encodings.Web;
 using System.Text.Json;
 using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Store;
@@ -52,11 +51,9 @@ public static class SetCommand
     {
         null => null,
         _ when field is "engine.cylinders" or "engine.valvesPerCylinder" && int.TryParse(typed, NumberStyles.None, CultureInfo.InvariantCulture, out _) => typed,
-        _ when typed.StartsWith('[') || typed.StartsWith('{') => IsJson(typed) ? typed : Quoted(typed),
-        _ => Quoted(typed),
+        _ when typed.StartsWith('[') || typed.StartsWith('{') => IsJson(typed) ? typed : JsonText.Quoted(typed),
+        _ => JsonText.Quoted(typed),
     };
-
-    private static string Quoted(string text) => $"\"{JsonEncodedText.Encode(text, JavaScriptEncoder.UnsafeRelaxedJsonEscaping)}\"";
 
     private static bool IsJson(string typed)
     {

@@ -3,7 +3,6 @@ using System.Globalization;
 using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Measuring;
-using RebuildPlanner.Store;
 
 namespace RebuildPlanner.Cli;
 
@@ -18,20 +17,17 @@ public static class ShowCommand
     /// <summary>Makes the command.</summary>
     public static Command Make(Terminal terminal)
     {
-        Argument<string> number = new("job") { Description = "The job's number." };
-        StoreOption storeOption = new();
-        ExampleCommand command = new("show", "Shows a job as it stands: whose, what was asked, what was read, fitted, cut, limited.", Example) { number };
-        storeOption.AddTo(command);
+        ExampleCommand command = new("show", "Shows a job as it stands: whose, what was asked, what was read, fitted, cut, limited.", Example);
+        StoredJob stored = new();
+        stored.AddTo(command);
         command.SetAction(parsed =>
         {
-            using JobStore store = storeOption.Open(parsed, terminal);
-            string name = parsed.GetValue(number)!;
-            if (JobSource.Find(store, name, terminal) is not { } entries)
+            if (stored.Read(parsed, terminal) is not { } found)
             {
                 return ExitCode.Wrong;
             }
 
-            Show(JobSource.Folded(name, entries), entries, terminal.Output);
+            Show(found.Job, found.Entries, terminal.Output);
             return ExitCode.Done;
         });
         return command;
@@ -46,7 +42,7 @@ public static class ShowCommand
         Line("taken in", job.Opened);
         Line("complaint", job.Complaint);
         Line("asked for", job.Asked);
-        Dictionary<string, string> struck = JobVerbs.Struck(entries);
+        Dictionary<string, string> struck = JobFold.Struck(entries);
         foreach (IGrouping<EntryKind, Entry> kind in entries
             .Where(entry => entry.Kind is not (EntryKind.Job or EntryKind.Customer or EntryKind.Engine or EntryKind.Strike or EntryKind.Closed or EntryKind.Reading) && !struck.ContainsKey(entry.Key))
             .GroupBy(entry => entry.Kind).OrderBy(kind => kind.Key))

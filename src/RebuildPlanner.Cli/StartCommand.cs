@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.Globalization;
-using System.Text.Json;
 using RebuildPlanner.Core.Entries;
 using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
@@ -56,7 +55,7 @@ public static class StartCommand
             {
                 if (parsed.GetValue(option) is { } value)
                 {
-                    (EntryKind kind, string body) = JobVerbs.Set(entries, path, $"\"{JsonEncodedText.Encode(value)}\"", out _)!.Value;
+                    (EntryKind kind, string body) = JobVerbs.Set(entries, path, JsonText.Quoted(value), out _)!.Value;
                     entries.RemoveAll(entry => entry.Kind == kind);
                     entries.Add(New(kind, body));
                 }

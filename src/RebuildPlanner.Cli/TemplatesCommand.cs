@@ -44,11 +44,7 @@ public static class TemplatesCommand
             {
                 terminal.Output.WriteLine($"{path}: was there already, left as it is");
             }
-            else if (OutputFile.Write(path, TemplateFiles.Read(name), [], terminal.Error))
-            {
-                terminal.Output.WriteLine(path);
-            }
-            else
+            else if (!OutputFile.WriteAndSay(path, TemplateFiles.Read(name), [], terminal))
             {
                 return ExitCode.Wrong;
             }

@@ -29,9 +29,12 @@ internal sealed class WriteOptions
     /// <summary>The store, opened.</summary>
     public JobStore Open(ParseResult parsed, Terminal terminal) => _store.Open(parsed, terminal);
 
+    /// <summary>Who writes, or null.</summary>
+    public string? By(ParseResult parsed) => parsed.GetValue(_by);
+
     /// <summary>A new entry of these options.</summary>
     public Entry Entry(EntryKind kind, string body, ParseResult parsed, Terminal terminal) =>
-        new(parsed.GetValue(_key) ?? NewKey(terminal), kind, body, terminal.Now(), parsed.GetValue(_by));
+        new(parsed.GetValue(_key) ?? NewKey(terminal), kind, body, terminal.Now(), By(parsed));
 
     /// <summary>A key of its own; those written later come later in order.</summary>
     /// <remarks>
@@ -56,8 +59,7 @@ internal sealed class WriteOptions
     }
 
     /// <summary>Writes entries into a job.</summary>
-    /// <param name="entries">The new ones; the last is the one that faults are told of.</param>
-    /// <param name="what">What to call it in messages.</param>
+    /// <param name="what">What to call them in messages.</param>
     /// <param name="issued">An issued sheet to keep, with its entry's key, or null.</param>
     /// <returns>The job with them, or null after the reason has been written.</returns>
     public static WrittenJob? Write(
@@ -65,20 +67,24 @@ internal sealed class WriteOptions
         Write(store, number, _ => (entries, null), what, terminal, issued);
 
     /// <summary>Writes what is made of the entries that are there, while nobody else writes.</summary>
+    /// <param name="make">From the entries there are to the new ones, or what is wrong.</param>
+    /// <param name="where">What to call one of the new ones in messages, where it has a name of its own.</param>
     public static WrittenJob? Write(
         JobStore store, string number, Func<IReadOnlyList<Entry>, (IReadOnlyList<Entry> Added, string? Problem)> make, string what, Terminal terminal,
-        (string Key, byte[] Pdf)? issued = null)
+        (string Key, byte[] Pdf)? issued = null, Func<Entry, string?>? where = null)
     {
         string? refused = null;
         IReadOnlyList<Entry> all = [];
+        IReadOnlyList<(Fault Fault, Entry? Of)> faults = [];
         JobStore.Change? change = store.Append(number, before =>
         {
             (IReadOnlyList<Entry> made, string? problem) = make(before);
-            Entry[] added = [.. made.Where(entry => !before.Any(known => Same(known, entry)))];
-            refused = problem ?? Clash(before, added);
+            Dictionary<string, Entry> known = before.ToDictionary(entry => entry.Key);
+            Entry[] added = [.. made.Where(entry => !(known.TryGetValue(entry.Key, out Entry? there) && Same(there, entry)))];
+            refused = problem ?? Clash(known, added);
             all = [.. before, .. added];
-            (Job? job, IReadOnlyList<Fault> faults) = refused is null && added.Length > 0 ? JobVerbs.Add(before, added) : (null, []);
-            return new JobStore.Change(refused is null ? added : [], faults, job);
+            (Job? job, faults) = refused is null && added.Length > 0 ? JobVerbs.Add(before, added) : (null, []);
+            return new JobStore.Change(refused is null ? added : [], [.. faults.Select(fault => fault.Fault)], job);
         }, issued);
         if (change is null)
         {
@@ -86,10 +92,14 @@ internal sealed class WriteOptions
             return null;
         }
 
-        foreach (Fault fault in change.Faults)
+        foreach ((Fault fault, Entry? of) in faults)
         {
-            string place = fault.Path.Length == 0 ? "" : $"{fault.Path}: ";
-            terminal.Error.WriteLine($"{what}: {place}{(fault.Value is null ? "" : $"\"{fault.Value}\": ")}{fault.Message}");
+            InputFile.Say(of is null ? what : where?.Invoke(of) ?? what, fault, terminal.Error);
+        }
+
+        if (where is not null)
+        {
+            InputFile.Count(faults.Count, "nothing was written", terminal.Error);
         }
 
         if (refused is not null)
@@ -97,13 +107,13 @@ internal sealed class WriteOptions
             terminal.Error.WriteLine($"{what}: {refused}.");
         }
 
-        return change.Faults.Count > 0 || refused is not null ? null : new WrittenJob(number, all, change.Job);
+        return faults.Count > 0 || refused is not null ? null : new WrittenJob(number, all, change.Job);
     }
 
-    private static bool Same(Entry known, Entry entry) => known.Key == entry.Key && known.Kind == entry.Kind && known.Body == entry.Body;
+    private static bool Same(Entry known, Entry entry) => known.Kind == entry.Kind && known.Body == entry.Body;
 
-    private static string? Clash(IReadOnlyList<Entry> before, IReadOnlyList<Entry> added) =>
-        before.FirstOrDefault(known => added.Any(entry => entry.Key == known.Key)) is { } other
+    private static string? Clash(Dictionary<string, Entry> known, IReadOnlyList<Entry> added) =>
+        added.FirstOrDefault(entry => known.ContainsKey(entry.Key)) is { } other
             ? $"another entry was written under the key {other.Key} already; take a new key"
             : null;
 }

@@ -3,10 +3,10 @@ using RebuildPlanner.Core.Jobs;
 
 namespace RebuildPlanner.Cli;
 
-/// <summary>A job just written to: its entries, and the job they fold to, which was folded when they were judged.</summary>
+/// <summary>A job in the store: its entries, and the job they fold to, folded once and only where it is asked for.</summary>
 /// <param name="number">Its number.</param>
-/// <param name="entries">Its entries with the new ones.</param>
-/// <param name="job">The job, or null where nothing new had to be judged.</param>
+/// <param name="entries">Its entries.</param>
+/// <param name="job">The job where it is folded already, as when new entries were judged.</param>
 internal sealed class WrittenJob(string number, IReadOnlyList<Entry> entries, Job? job)
 {
     private Job? _job = job;

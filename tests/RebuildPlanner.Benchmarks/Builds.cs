@@ -32,6 +32,25 @@ internal static class Builds
         return to;
     }
 
+    /// <summary>A project of one file, from the resources of this program; its path.</summary>
+    /// <param name="folder">Where it is made.</param>
+    /// <param name="name">Its name.</param>
+    /// <param name="program">The resource of its one file.</param>
+    /// <param name="project">The resource of the project file.</param>
+    public static string Project(string folder, string name, string program, string project)
+    {
+        string home = Directory.CreateDirectory(Path.Combine(folder, name)).FullName, path = Path.Combine(home, name + ".csproj");
+        File.WriteAllText(Path.Combine(home, "Program.cs"), Resource(program));
+        File.WriteAllText(path, Resource(project));
+        return path;
+    }
+
+    private static string Resource(string name)
+    {
+        using StreamReader reader = new(typeof(Builds).Assembly.GetManifestResourceStream(name)!);
+        return reader.ReadToEnd();
+    }
+
     // Not the SDK's own identifier, which on some distributions names the distribution.
     private static string Machine() =>
         (OperatingSystem.IsWindows() ? "win-" : OperatingSystem.IsMacOS() ? "osx-" : "linux-")

@@ -22,7 +22,7 @@ public static class JobFold
     /// <summary>The job file that the entries make, and where in it each row's entry stands.</summary>
     internal static (byte[] Utf8, Dictionary<string, Entry> Places) File(IReadOnlyList<Entry> entries)
     {
-        Dictionary<string, string> struck = Strikes(entries);
+        Dictionary<string, string> struck = Struck(entries);
         ILookup<EntryKind, Entry> byKind = entries.ToLookup(entry => entry.Kind);
         Dictionary<string, Entry> places = [];
         ArrayBufferWriter<byte> buffer = new();
@@ -66,7 +66,7 @@ public static class JobFold
     }
 
     /// <summary>The reasons of struck entries, by key; the first strike counts.</summary>
-    internal static Dictionary<string, string> Strikes(IReadOnlyList<Entry> entries)
+    public static Dictionary<string, string> Struck(IReadOnlyList<Entry> entries)
     {
         Dictionary<string, string> struck = [];
         foreach (Entry entry in entries.Where(entry => entry.Kind == EntryKind.Strike))

@@ -11,19 +11,17 @@ public static class JobVerbs
 {
     private static readonly JsonSerializerOptions _relaxed = new() { Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
 
-    /// <summary>Adds one element; the faults are those of the job with it, places told from the element on.</summary>
+    /// <summary>Adds entries; the faults are those of the job with them, each with the new entry it lies with and its place told from there on.</summary>
     /// <param name="entries">The job's entries.</param>
-    /// <param name="added">The new ones, in order; the last is the one that faults are told of.</param>
-    /// <returns>The job with them, or faults.</returns>
-    public static (Job? Job, IReadOnlyList<Fault> Faults) Add(IReadOnlyList<Entry> entries, params IReadOnlyList<Entry> added)
+    /// <param name="added">The new ones, in order.</param>
+    /// <returns>The job with them, or faults; the entry of a fault that lies with none of the new ones is null.</returns>
+    public static (Job? Job, IReadOnlyList<(Fault Fault, Entry? Of)> Faults) Add(IReadOnlyList<Entry> entries, params IReadOnlyList<Entry> added)
     {
         (byte[] file, Dictionary<string, Entry> places) = JobFold.File([.. entries, .. added]);
         (Job? job, IReadOnlyList<Fault> faults) = JobFileReader.Read(file);
-        return (job, [.. faults.Select(fault => Told(fault, places, added))]);
+        KeyValuePair<string, Entry>[] fresh = faults.Count == 0 ? [] : [.. places.Where(place => added.Contains(place.Value))];
+        return (job, [.. faults.Select(fault => Told(fault, fresh))]);
     }
-
-    /// <summary>The reasons of struck entries, by key.</summary>
-    public static Dictionary<string, string> Struck(IReadOnlyList<Entry> entries) => JobFold.Strikes(entries);
 
     /// <summary>The body of a strike.</summary>
     /// <param name="entries">The job's entries.</param>
@@ -36,7 +34,7 @@ public static class JobVerbs
         problem = struck is null ? $"there is no entry {key} in this job"
             : struck.Kind is EntryKind.Job or EntryKind.Customer or EntryKind.Engine or EntryKind.Strike or EntryKind.Closed or EntryKind.Sheet
                 ? $"an entry of {EntryWords.Kinds.WordFor(struck.Kind)} is not struck; write a new one, and the last counts"
-            : JobFold.Strikes(entries).TryGetValue(key, out string? before) ? $"entry {key} is struck already: {before}"
+            : JobFold.Struck(entries).TryGetValue(key, out string? before) ? $"entry {key} is struck already: {before}"
             : string.IsNullOrWhiteSpace(reason) ? "an entry is struck with a reason; write why"
             : null;
         return problem is null ? new JsonObject { ["entry"] = key, ["reason"] = reason }.ToJsonString(_relaxed) : null;
@@ -74,16 +72,16 @@ public static class JobVerbs
         return (single.Kind, root.ToJsonString(_relaxed));
     }
 
-    private static Fault Told(Fault fault, Dictionary<string, Entry> places, IReadOnlyList<Entry> added)
+    private static (Fault Fault, Entry? Of) Told(Fault fault, KeyValuePair<string, Entry>[] fresh)
     {
-        foreach ((string place, Entry entry) in places)
+        foreach ((string place, Entry entry) in fresh)
         {
-            if (added.Count > 0 && entry == added[^1] && (fault.Path == place || fault.Path.StartsWith(place + ".", StringComparison.Ordinal)))
+            if (fault.Path == place || fault.Path.StartsWith(place + ".", StringComparison.Ordinal))
             {
-                return fault with { Path = fault.Path[place.Length..].TrimStart('.') };
+                return (fault with { Path = fault.Path[place.Length..].TrimStart('.') }, entry);
             }
         }
 
-        return fault;
+        return (fault, null);
     }
 }

@@ -1,4 +1,5 @@
 using System.Globalization;
+using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
 
@@ -48,7 +49,7 @@ public sealed class ResultsText(Results results, UnitSystem system)
 
     /// <summary>The head, bank or valve a limit is set on; nothing where it is set on none of them.</summary>
     public static IEnumerable<string> PartsOf(Place place) =>
-        new[] { place.Head, place.Bank, place.Valve?.ToString().ToLowerInvariant() }.OfType<string>();
+        new[] { place.Head, place.Bank, place.Valve is { } valve ? JobWords.Valves.WordFor(valve) : null }.OfType<string>();
 
     /// <summary>A probability in per cent. It is never printed as certain: what rounds to 100 % is "> 99.9 %".</summary>
     public static string Belief(double? probability) => probability switch

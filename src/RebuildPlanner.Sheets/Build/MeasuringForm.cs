@@ -1,3 +1,4 @@
+using RebuildPlanner.Core.JobFile;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
@@ -125,10 +126,10 @@ public static class MeasuringForm
     /// <summary>The part of a place that tells columns apart.</summary>
     private static string Aside(Place place) => place switch
     {
-        { Axis: { } axis } => axis == BoreAxis.Thrust ? "thrust" : "along crank",
+        { Axis: { } axis } => JobWords.Axes.WordFor(axis),
         { ClockHours: { } hours } => FormattableString.Invariant($"{hours} h"),
-        { Valve: { } valve } => Word(valve),
-        { At: At.Front or At.Rear } => Word(place.At),
+        { Valve: { } valve } => JobWords.Valves.WordFor(valve),
+        { At: (At.Front or At.Rear) and var end } => JobWords.WordFor(end),
         _ => "",
     };
 
@@ -141,11 +142,9 @@ public static class MeasuringForm
             {
                 place.Cylinder is { } cylinder ? $"{words.Of(Phrase.Cylinder)} {cylinder}" : place.Head is { } head ? words.Of(Phrase.FormHeadOf, ("head", head))
                     : place.Bank is { } bank ? words.Of(Phrase.FormBankOf, ("bank", bank)) : null,
-                place.At is At.Front or At.Rear ? null : Word(place.At),
+                place.At is { } at and not (At.Front or At.Rear) ? JobWords.WordFor(at) : null,
             }.OfType<string>(),
         ];
         return named.Length == 0 ? words.Of(Phrase.FormEngine) : string.Join(", ", named);
     }
-
-    private static string Word<T>(T word) => word?.ToString()?.ToLowerInvariant()!;
 }

@@ -34,9 +34,8 @@ internal static class SpreadPart
         {
             if (quantity is not null)
             {
-                string title = name == Phrase.SpreadRatio ? words.Of(name) : words.Of(name, ("unit", text.Unit(quantity.Kind)));
                 rows.Add([
-                    title, text.Value(quantity), text.End(quantity, q => q.Low), text.End(quantity, q => q.High), text.End(quantity, q => q.WorstLow),
+                    words.Of(name, ("unit", text.Unit(quantity.Kind))), text.Value(quantity), text.End(quantity, q => q.Low), text.End(quantity, q => q.High), text.End(quantity, q => q.WorstLow),
                     text.End(quantity, q => q.WorstHigh)]);
             }
         }

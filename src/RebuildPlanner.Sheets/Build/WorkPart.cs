@@ -72,7 +72,7 @@ internal static class WorkPart
 
     private static string Where(Place place, SheetWording words)
     {
-        string[] named = [.. new[] { place.Cylinder is { } cylinder ? $"{words.Of(Phrase.Cylinder)} {cylinder}" : null, place.Head, place.Bank, place.Valve?.ToString().ToLowerInvariant() }.OfType<string>()];
+        string[] named = [.. place.Cylinder is { } cylinder ? [$"{words.Of(Phrase.Cylinder)} {cylinder}"] : Array.Empty<string>(), .. ResultsText.PartsOf(place)];
         return named.Length == 0 ? words.Of(Phrase.All) : string.Join(", ", named);
     }
 

@@ -15,7 +15,7 @@ internal static class ProcessBenchmark
         string folder = Directory.CreateTempSubdirectory("rebuild-benchmark-").FullName;
         try
         {
-            string empty = Builds.Publish(EmptyProject(folder), Path.Combine(folder, "empty-out"), "--self-contained", "false", "-p:PublishReadyToRun=true");
+            string empty = Builds.Publish(Builds.Project(folder, "empty", "EmptyProgram", "EmptyProject"), Path.Combine(folder, "empty-out"), "--self-contained", "false", "-p:PublishReadyToRun=true");
             string job = Path.Combine(folder, "vee-eight.json");
             File.WriteAllText(job, EightCylinderJob.Text());
             double Nothing() => ByTurns.Milliseconds("dotnet", Path.Combine(empty, "empty.dll"));
@@ -39,20 +39,5 @@ internal static class ProcessBenchmark
         Console.WriteLine(string.Create(
             CultureInfo.InvariantCulture,
             $"process: results {build} {oursMs:0.0} ms, dotnet empty {emptyMs:0.0} ms, medians of {Runs}; ratio {oursMs / emptyMs:0.00} (wanted ≤ {Wanted:0})"));
-    }
-
-    private static string EmptyProject(string folder)
-    {
-        string project = Directory.CreateDirectory(Path.Combine(folder, "empty")).FullName;
-        File.WriteAllText(Path.Combine(project, "Program.cs"), Resource("EmptyProgram"));
-        string path = Path.Combine(project, "empty.csproj");
-        File.WriteAllText(path, Resource("EmptyProject"));
-        return path;
-    }
-
-    private static string Resource(string name)
-    {
-        using StreamReader reader = new(typeof(ProcessBenchmark).Assembly.GetManifestResourceStream(name)!);
-        return reader.ReadToEnd();
     }
 }

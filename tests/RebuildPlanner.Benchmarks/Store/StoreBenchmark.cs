@@ -30,7 +30,7 @@ internal static class StoreBenchmark
             Grown("a page listed", store => ByTurns.Milliseconds(native, "jobs", "--store", store), few, many);
             Grown("a job in the middle found by text", store => ByTurns.Milliseconds(native, "jobs", "--text", "Engine 7", "--store", store), few, many);
 
-            string bare = Path.Combine(Builds.Publish(BareProject(folder), Path.Combine(folder, "bare-out"), "-p:PublishAot=true"), OperatingSystem.IsWindows() ? "bare.exe" : "bare");
+            string bare = Path.Combine(Builds.Publish(Builds.Project(folder, "bare", "BareInsert", "BareInsertProject"), Path.Combine(folder, "bare-out"), "-p:PublishAot=true"), OperatingSystem.IsWindows() ? "bare.exe" : "bare");
             string rows = Path.Combine(folder, "bare.db");
             foreach (string store in new[] { few, many })
             {
@@ -50,21 +50,6 @@ internal static class StoreBenchmark
     {
         (double fewMs, double manyMs) = ByTurns.Medians(Warm, Runs, () => time(few), () => time(many));
         Say($"store: {what} {manyMs:0.0} ms of {Many} jobs, {fewMs:0.0} ms of {Few}, medians of {Runs}; ratio {manyMs / fewMs:0.00} (wanted ≤ {WantedGrowth:0})");
-    }
-
-    private static string BareProject(string folder)
-    {
-        string project = Directory.CreateDirectory(Path.Combine(folder, "bare")).FullName;
-        File.WriteAllText(Path.Combine(project, "Program.cs"), Resource("BareInsert"));
-        string path = Path.Combine(project, "bare.csproj");
-        File.WriteAllText(path, Resource("BareInsertProject"));
-        return path;
-    }
-
-    private static string Resource(string name)
-    {
-        using StreamReader reader = new(typeof(StoreBenchmark).Assembly.GetManifestResourceStream(name)!);
-        return reader.ReadToEnd();
     }
 
     private static void Say(FormattableString text) => Console.WriteLine(text.ToString(CultureInfo.InvariantCulture));

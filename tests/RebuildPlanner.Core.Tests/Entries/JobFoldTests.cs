@@ -74,10 +74,10 @@ public class JobFoldTests
     {
         Entry wrong = New("r1", EntryKind.Reading, """{"what":"bore","cylinder":"3","value":"84,1 mm"}""");
 
-        (Job? job, IReadOnlyList<Fault> faults) = JobVerbs.Add(Small(), wrong);
+        (Job? job, IReadOnlyList<(Fault Fault, Entry? Of)> faults) = JobVerbs.Add(Small(), wrong);
 
         Assert.Null(job);
-        Assert.Equal(["cylinder", "value"], faults.Select(fault => fault.Path).Order());
+        Assert.Equal(["cylinder", "value"], faults.Select(fault => fault.Fault.Path).Order());
     }
 
     [Fact]
@@ -85,7 +85,7 @@ public class JobFoldTests
     {
         Entry[] entries = [.. Small(), New("r1", EntryKind.Reading, """{"what":"deck","cylinder":"1","value":"0.2 mm below","stage":"planned"}""")];
 
-        (Job? job, IReadOnlyList<Fault> faults) = JobVerbs.Add(entries, New("r2", EntryKind.Reading, """{"what":"piston protrusion","cylinder":"1","value":"0.1 mm proud","stage":"planned"}"""));
+        (Job? job, IReadOnlyList<(Fault Fault, Entry? Of)> faults) = JobVerbs.Add(entries, New("r2", EntryKind.Reading, """{"what":"piston protrusion","cylinder":"1","value":"0.1 mm proud","stage":"planned"}"""));
 
         Assert.Null(job);
         Assert.NotEmpty(faults);
