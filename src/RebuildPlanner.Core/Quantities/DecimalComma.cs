@@ -8,6 +8,11 @@ internal static class DecimalComma
 {
     public static string? Problem(string text)
     {
+        if (!text.Contains(',', StringComparison.Ordinal))
+        {
+            return null;
+        }
+
         StringBuilder written = new();
         bool comma = false, thousands = false;
         for (int i = 0; i < text.Length;)

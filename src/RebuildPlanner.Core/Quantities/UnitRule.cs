@@ -7,7 +7,7 @@ internal readonly record struct SettledUnits(QuantityKind Kind, WrittenUnit? Val
 
     // The only kind whose coherent unit is not decimal to its written one: it is converted once, last.
     public double Coherent(decimal working) => Kind == QuantityKind.Angle
-        ? UnitsNet.Angle.From((double)working, UnitsNet.Units.AngleUnit.Degree).As(UnitsNet.Units.AngleUnit.Radian)
+        ? double.DegreesToRadians((double)working)
         : (double)working + 0.0;
 }
 

@@ -1,44 +1,61 @@
-using UnitsNet.Units;
 using static RebuildPlanner.Core.Quantities.QuantityKind;
 
 namespace RebuildPlanner.Core.Quantities;
 
 /// <summary>Every unit a workshop may write, in each of its spellings.</summary>
+/// <remarks>
+/// The inch is 25.4 mm, the pound 0.45359237 kg, standard gravity 9.80665 m/s² and the zero of Celsius 273.15 K, each exact by definition; all else is
+/// computed from them. Source: sp811 (appendix B). A test holds every unit to a library of units.
+/// </remarks>
 internal static class UnitTable
 {
-    public static readonly WrittenUnit Millimetre = WrittenUnit.Working("mm", Length);
-    public static readonly WrittenUnit Inch = Of("in", LengthUnit.Inch);
-    public static readonly WrittenUnit Thou = Of("thou", LengthUnit.Mil);
-    public static readonly WrittenUnit Metre = Of("m", LengthUnit.Meter);
-    public static readonly WrittenUnit Foot = Of("ft", LengthUnit.Foot);
-    public static readonly WrittenUnit SquareMillimetre = WrittenUnit.Working("mm2", Area);
-    public static readonly WrittenUnit SquareInch = Of("in2", AreaUnit.SquareInch);
-    public static readonly WrittenUnit CubicCentimetre = Of("cc", VolumeUnit.CubicCentimeter);
-    public static readonly WrittenUnit CubicInch = Of("cu in", VolumeUnit.CubicInch);
-    public static readonly WrittenUnit Litre = Of("L", VolumeUnit.Liter);
-    public static readonly WrittenUnit Degree = WrittenUnit.Working("deg", Angle);
-    public static readonly WrittenUnit Kilopascal = WrittenUnit.Working("kPa", Pressure);
-    public static readonly WrittenUnit Psi = Of("psi", PressureUnit.PoundForcePerSquareInch);
-    public static readonly WrittenUnit Bar = Of("bar", PressureUnit.Bar);
-    public static readonly WrittenUnit Celsius = WrittenUnit.Working("C", Temperature);
-    public static readonly WrittenUnit Fahrenheit = Of("F", TemperatureUnit.DegreeFahrenheit, TemperatureDeltaUnit.DegreeFahrenheit);
-    public static readonly WrittenUnit KilojoulePerKilogram = WrittenUnit.Working("kJ/kg", SpecificEnergy);
+    private const decimal MillimetresPerInch = 25.4m, MillimetresPerMetre = 1000m, KelvinAtZeroCelsius = 273.15m, FahrenheitAtZeroCelsius = 32m;
+    private const decimal CelsiusPerFahrenheit = 5m / 9m, KilogramsPerPound = 0.45359237m, GravityMetresPerSecondSquared = 9.80665m, PascalsPerKilopascal = 1000m;
+    private const decimal SquareMillimetresPerSquareInch = MillimetresPerInch * MillimetresPerInch;
+    private const decimal CubicMillimetresPerCubicInch = SquareMillimetresPerSquareInch * MillimetresPerInch, CubicMillimetresPerCubicCentimetre = 1000m;
+
+    // As many digits as a double gives back; the rest of the unending fraction would only make sums long.
+    private const int PsiDecimals = 14;
+
+    private static readonly decimal KilopascalsPerPsi = decimal.Round(
+        KilogramsPerPound * GravityMetresPerSecondSquared * MillimetresPerMetre * MillimetresPerMetre / SquareMillimetresPerSquareInch / PascalsPerKilopascal, PsiDecimals);
+
+    public static readonly WrittenUnit Millimetre = new("mm", Length);
+    public static readonly WrittenUnit Inch = new("in", Length, MillimetresPerInch);
+    public static readonly WrittenUnit Thou = new("thou", Length, MillimetresPerInch / 1000m);
+    public static readonly WrittenUnit Metre = new("m", Length, MillimetresPerMetre);
+    public static readonly WrittenUnit Foot = new("ft", Length, 12m * MillimetresPerInch);
+    public static readonly WrittenUnit SquareMillimetre = new("mm2", Area);
+    public static readonly WrittenUnit SquareInch = new("in2", Area, SquareMillimetresPerSquareInch);
+    public static readonly WrittenUnit CubicCentimetre = new("cc", Volume, CubicMillimetresPerCubicCentimetre);
+    public static readonly WrittenUnit CubicInch = new("cu in", Volume, CubicMillimetresPerCubicInch);
+    public static readonly WrittenUnit Litre = new("L", Volume, 1000m * CubicMillimetresPerCubicCentimetre);
+    public static readonly WrittenUnit Degree = new("deg", Angle);
+    public static readonly WrittenUnit Kilopascal = new("kPa", Pressure);
+    public static readonly WrittenUnit Psi = new("psi", Pressure, KilopascalsPerPsi);
+    public static readonly WrittenUnit Bar = new("bar", Pressure, 100m);
+    public static readonly WrittenUnit Celsius = new("C", Temperature);
+    public static readonly WrittenUnit Fahrenheit = new("F", Temperature, CelsiusPerFahrenheit, FahrenheitAtZeroCelsius);
+    public static readonly WrittenUnit KilojoulePerKilogram = new("kJ/kg", SpecificEnergy);
+
+    private static readonly WrittenUnit Micrometre = new("µm", Length, 0.001m);
+    private static readonly WrittenUnit Microinch = new("µin", Length, MillimetresPerInch / 1_000_000m);
+    private static readonly WrittenUnit SquareCentimetre = new("cm2", Area, 100m);
 
     // Both code points of the Greek letter are met: the micro sign of Latin-1 and the letter itself.
     private static readonly WrittenUnit[] All =
     [
-        Millimetre, Inch, Thou, Of("µm", LengthUnit.Micrometer), Of("μm", LengthUnit.Micrometer), Of("um", LengthUnit.Micrometer),
-        Of("\"", LengthUnit.Inch), Of("″", LengthUnit.Inch), Of("mil", LengthUnit.Mil), Of("cm", LengthUnit.Centimeter), Metre, Foot,
-        Of("µin", LengthUnit.Microinch), Of("μin", LengthUnit.Microinch), Of("uin", LengthUnit.Microinch),
-        SquareMillimetre, WrittenUnit.Working("mm²", Area), Of("cm2", AreaUnit.SquareCentimeter), Of("cm²", AreaUnit.SquareCentimeter),
-        SquareInch, Of("in²", AreaUnit.SquareInch),
-        CubicCentimetre, Of("cm3", VolumeUnit.CubicCentimeter), Of("cm³", VolumeUnit.CubicCentimeter), Of("mL", VolumeUnit.Milliliter),
-        Of("ml", VolumeUnit.Milliliter), Litre, Of("l", VolumeUnit.Liter), CubicInch, Of("in3", VolumeUnit.CubicInch),
-        Of("in³", VolumeUnit.CubicInch),
-        Degree, WrittenUnit.Working("°", Angle), Kilopascal, Bar, Psi,
-        Celsius, WrittenUnit.Working("°C", Temperature), Fahrenheit,
-        Of("°F", TemperatureUnit.DegreeFahrenheit, TemperatureDeltaUnit.DegreeFahrenheit),
-        Of("K", TemperatureUnit.Kelvin, TemperatureDeltaUnit.Kelvin), KilojoulePerKilogram,
+        Millimetre, Inch, Thou, Micrometre, Micrometre with { Word = "μm" }, Micrometre with { Word = "um" },
+        Inch with { Word = "\"" }, Inch with { Word = "″" }, Thou with { Word = "mil" }, new("cm", Length, 10m), Metre, Foot,
+        Microinch, Microinch with { Word = "μin" }, Microinch with { Word = "uin" },
+        SquareMillimetre, SquareMillimetre with { Word = "mm²" }, SquareCentimetre, SquareCentimetre with { Word = "cm²" },
+        SquareInch, SquareInch with { Word = "in²" },
+        CubicCentimetre, CubicCentimetre with { Word = "cm3" }, CubicCentimetre with { Word = "cm³" }, CubicCentimetre with { Word = "mL" },
+        CubicCentimetre with { Word = "ml" }, Litre, Litre with { Word = "l" }, CubicInch, CubicInch with { Word = "in3" },
+        CubicInch with { Word = "in³" },
+        Degree, Degree with { Word = "°" }, Kilopascal, Bar, Psi,
+        Celsius, Celsius with { Word = "°C" }, Fahrenheit, Fahrenheit with { Word = "°F" },
+        new("K", Temperature, Zero: KelvinAtZeroCelsius), KilojoulePerKilogram,
     ];
 
     private static readonly Dictionary<string, WrittenUnit> BySpelling = All.ToDictionary(unit => unit.Word, StringComparer.Ordinal);
@@ -72,20 +89,4 @@ internal static class UnitTable
         SpecificEnergy => [KilojoulePerKilogram],
         _ => [],
     };
-
-    private static WrittenUnit Of(string word, LengthUnit unit) =>
-        WrittenUnit.Multiple(word, Length, value => UnitsNet.Length.From(value, unit).As(LengthUnit.Millimeter));
-
-    private static WrittenUnit Of(string word, AreaUnit unit) =>
-        WrittenUnit.Multiple(word, Area, value => UnitsNet.Area.From(value, unit).As(AreaUnit.SquareMillimeter));
-
-    private static WrittenUnit Of(string word, VolumeUnit unit) =>
-        WrittenUnit.Multiple(word, Volume, value => UnitsNet.Volume.From(value, unit).As(VolumeUnit.CubicMillimeter));
-
-    private static WrittenUnit Of(string word, PressureUnit unit) =>
-        WrittenUnit.Multiple(word, Pressure, value => UnitsNet.Pressure.From(value, unit).As(PressureUnit.Kilopascal));
-
-    private static WrittenUnit Of(string word, TemperatureUnit unit, TemperatureDeltaUnit difference) => WrittenUnit.WithOffset(
-        word, Temperature, value => UnitsNet.Temperature.From(value, unit).As(TemperatureUnit.DegreeCelsius),
-        value => UnitsNet.TemperatureDelta.From(value, difference).As(TemperatureDeltaUnit.DegreeCelsius));
 }

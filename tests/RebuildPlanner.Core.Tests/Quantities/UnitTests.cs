@@ -1,4 +1,5 @@
 using RebuildPlanner.Core.Quantities;
+using UnitsNet.Units;
 
 namespace RebuildPlanner.Core.Tests.Quantities;
 
@@ -45,6 +46,30 @@ public class UnitTests
     [InlineData("1 in²", 645.16)]
     public void Area_units_are_exactly_the_published_square_millimetres(string text, double squareMillimetres) =>
         Assert.Equal(squareMillimetres, Rules.Read(text, Rules.Area).Value);
+
+    [Fact]
+    public void Every_unit_agrees_with_a_library_of_units()
+    {
+        (string Word, UnitsNet.IQuantity One, Enum Working)[] known =
+        [
+            ("in", UnitsNet.Length.FromInches(1), LengthUnit.Millimeter), ("thou", UnitsNet.Length.FromMils(1), LengthUnit.Millimeter),
+            ("m", UnitsNet.Length.FromMeters(1), LengthUnit.Millimeter), ("ft", UnitsNet.Length.FromFeet(1), LengthUnit.Millimeter),
+            ("µm", UnitsNet.Length.FromMicrometers(1), LengthUnit.Millimeter), ("cm", UnitsNet.Length.FromCentimeters(1), LengthUnit.Millimeter),
+            ("µin", UnitsNet.Length.FromMicroinches(1), LengthUnit.Millimeter), ("cm2", UnitsNet.Area.FromSquareCentimeters(1), AreaUnit.SquareMillimeter),
+            ("in2", UnitsNet.Area.FromSquareInches(1), AreaUnit.SquareMillimeter), ("cc", UnitsNet.Volume.FromCubicCentimeters(1), VolumeUnit.CubicMillimeter),
+            ("mL", UnitsNet.Volume.FromMilliliters(1), VolumeUnit.CubicMillimeter), ("L", UnitsNet.Volume.FromLiters(1), VolumeUnit.CubicMillimeter),
+            ("cu in", UnitsNet.Volume.FromCubicInches(1), VolumeUnit.CubicMillimeter), ("bar", UnitsNet.Pressure.FromBars(1), PressureUnit.Kilopascal),
+            ("psi", UnitsNet.Pressure.FromPoundsForcePerSquareInch(1), PressureUnit.Kilopascal),
+            ("F", UnitsNet.Temperature.FromDegreesFahrenheit(1), TemperatureUnit.DegreeCelsius), ("K", UnitsNet.Temperature.FromKelvins(1), TemperatureUnit.DegreeCelsius),
+        ];
+
+        foreach ((string word, UnitsNet.IQuantity one, Enum working) in known)
+        {
+            // The library's doubles carry an error or two in the last place; our temperatures are rounded to nine decimals.
+            double tolerance = working is TemperatureUnit ? 5.1e-10 : 1e-15 * one.As(working);
+            Assert.Equal(one.As(working), (double)UnitTable.Find(word)!.ToWorking(1m), tolerance);
+        }
+    }
 
     [Fact]
     public void A_psi_is_a_pound_force_on_a_square_inch()
