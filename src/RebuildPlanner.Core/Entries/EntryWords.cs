@@ -6,10 +6,7 @@ namespace RebuildPlanner.Core.Entries;
 public static class EntryWords
 {
     /// <summary>Each kind's word.</summary>
-    public static WordList<EntryKind> Kinds { get; } = new(
-    [
-        .. Enum.GetValues<EntryKind>().Select(kind => (kind.ToString().ToLowerInvariant(), kind)),
-    ]);
+    public static WordList<EntryKind> Kinds { get; } = new(Array.ConvertAll(Enum.GetValues<EntryKind>(), kind => (kind.ToString().ToLowerInvariant(), kind)));
 
     /// <summary>The lists of a job file in its order, each with the kind of its rows; those of parts stand one level deeper.</summary>
     internal static IReadOnlyList<(string List, EntryKind Kind)> Lists { get; } =

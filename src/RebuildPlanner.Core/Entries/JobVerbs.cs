@@ -17,8 +17,8 @@ public static class JobVerbs
     /// <returns>The job with them, or faults; the entry of a fault that lies with none of the new ones is null.</returns>
     public static (Job? Job, IReadOnlyList<(Fault Fault, Entry? Of)> Faults) Add(IReadOnlyList<Entry> entries, params IReadOnlyList<Entry> added)
     {
-        (byte[] file, Dictionary<string, Entry> places) = JobFold.File([.. entries, .. added]);
-        (Job? job, IReadOnlyList<Fault> faults) = JobFileReader.Read(file);
+        (ReadOnlyMemory<byte> file, Dictionary<string, Entry> places) = JobFold.File([.. entries, .. added]);
+        (Job? job, IReadOnlyList<Fault> faults) = JobFileReader.Read(file.Span);
         KeyValuePair<string, Entry>[] fresh = faults.Count == 0 ? [] : [.. places.Where(place => added.Contains(place.Value))];
         return (job, [.. faults.Select(fault => Told(fault, fresh))]);
     }

@@ -11,12 +11,24 @@ internal static class CrossChecks
     public static void DeckAgainstProtrusion(
         IEnumerable<Sited<Reading>> readings, IEnumerable<Sited<StatedFigure>> stated, IReadOnlyList<string> cylinders, FaultList faults)
     {
-        var entries = readings.Where(read => read.Item.Struck is null)
-            .Select(read => (read.Item.What, read.Item.Place, read.Item.Stage, read.Node))
-            .Concat(stated.Select(figure => (figure.Item.What, figure.Item.Place, figure.Item.Stage, figure.Node)))
-            .Where(entry => entry.What is What.Deck or What.PistonProtrusion)
-            .OrderBy(entry => entry.Node.Spot.Offset);
+        List<(What What, Place Place, Stage? Stage, JsonTree Node)> entries = [];
+        foreach ((Reading reading, JsonTree node) in readings)
+        {
+            if (reading is { Struck: null, What: What.Deck or What.PistonProtrusion })
+            {
+                entries.Add((reading.What, reading.Place, reading.Stage, node));
+            }
+        }
 
+        foreach ((StatedFigure figure, JsonTree node) in stated)
+        {
+            if (figure.What is What.Deck or What.PistonProtrusion)
+            {
+                entries.Add((figure.What, figure.Place, figure.Stage, node));
+            }
+        }
+
+        entries.Sort((one, other) => one.Node.Spot.Offset.CompareTo(other.Node.Spot.Offset));
         Dictionary<(string Cylinder, Stage? Stage), (What What, JsonTree Node)> first = [];
         foreach ((What what, Place place, Stage? stage, JsonTree node) in entries)
         {

@@ -34,7 +34,7 @@ internal static class CutSection
         (string[] keys, QuantityRule rule, bool mayBeLeftOut) = Takes(kind);
         foreach (string key in PlaceKeys.Except(keys))
         {
-            fields.Refuse(key, $"'{key}' is not told of a {JobWords.Cuts.WordFor(kind)}");
+            fields.NotToldOf($"a {JobWords.Cuts.WordFor(kind)}", key);
         }
 
         Place place = new(

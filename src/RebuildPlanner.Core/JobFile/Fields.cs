@@ -7,20 +7,33 @@ namespace RebuildPlanner.Core.JobFile;
 /// <remarks>So the list of known fields is nowhere written twice: it is what the code that reads them asks for.</remarks>
 internal sealed class Fields
 {
-    private readonly Dictionary<string, JsonField> _written = [];
-    private readonly List<string> _known = [];
-    private readonly HashSet<string> _refused = [];
+    // As many as a reading is asked for.
+    private const int UsualAsked = 32;
+
+    // A job has hundreds of objects of a few fields each: looking along them costs less than a table for every one.
+    private const int MostLookedAlong = 16;
+
+    private readonly Dictionary<string, JsonField>? _byName;
+    private readonly List<(string Name, bool Refused)> _asked = new(UsualAsked);
 
     private Fields(JsonTree node, FaultList faults)
     {
         (Node, Faults) = (node, faults);
-        foreach (JsonField field in node.Fields)
+        ReadOnlySpan<JsonField> fields = node.Fields;
+        _byName = fields.Length > MostLookedAlong ? [] : null;
+        for (int index = 0; index < fields.Length; index++)
         {
-            if (!_written.TryAdd(field.Name, field))
+            JsonField field = fields[index];
+            if (Written(field.Name, fields[..index]) is { } first)
             {
+                field.IsKnown = true;
                 faults.Add(
                     field.Spot, node.PathOf(field.Name), field.Value?.Shown,
-                    $"the field '{JsonTree.Short(field.Name)}' stands here twice, first on line {_written[field.Name].Spot.Line}; keep one");
+                    $"the field '{JsonTree.Short(field.Name)}' stands here twice, first on line {first.Spot.Line}; keep one");
+            }
+            else
+            {
+                _byName?.Add(field.Name, field);
             }
         }
     }
@@ -44,10 +57,14 @@ internal sealed class Fields
     /// <summary>The value of a field; null where it is left out or written as null, which means the same.</summary>
     public JsonTree? Take(string name, bool required = false)
     {
-        _known.Add(name);
-        if (_written.TryGetValue(name, out JsonField? field) && field.Value is { Kind: not JsonKind.Nothing } value)
+        _asked.Add((name, false));
+        if (Written(name, Node.Fields) is { } field)
         {
-            return value;
+            field.IsKnown = true;
+            if (field.Value is { Kind: not JsonKind.Nothing } value)
+            {
+                return value;
+            }
         }
 
         if (required)
@@ -61,10 +78,18 @@ internal sealed class Fields
     /// <summary>The value of a field that has no business here: known by name, so the answer can say why.</summary>
     public void Refuse(string name, string why)
     {
-        _refused.Add(name);
-        if (Take(name) is { } value)
+        if (TakeRefused(name) is { } value)
         {
             Faults.Add(value, why);
+        }
+    }
+
+    /// <summary>The value of a field that does not go with what is described here.</summary>
+    public void NotToldOf(string thing, string name)
+    {
+        if (TakeRefused(name) is { } value)
+        {
+            Faults.Add(value, $"'{name}' is not told of {thing}");
         }
     }
 
@@ -96,17 +121,17 @@ internal sealed class Fields
     public T? Word<T>(string name, WordList<T> words, bool required = false)
         where T : struct
     {
-        if (Take(name, required) is not { } value || !Is(value, JsonKind.Text, $"one of {Wording.Listed(words.Words)}"))
+        if (Take(name, required) is not { } value)
         {
             return null;
         }
 
-        if (words.Find(value.Text) is { } meaning)
+        if (value.Kind == JsonKind.Text && words.Find(value.Text) is { } meaning)
         {
             return meaning;
         }
 
-        Faults.Add(value, Wording.Unknown("word", value.Text, words.Words));
+        Faults.Add(value, value.Kind == JsonKind.Text ? Wording.Unknown("word", value.Text, words.Words) : $"this must be one of {Wording.Listed(words.Words)}");
         return null;
     }
 
@@ -197,11 +222,38 @@ internal sealed class Fields
     /// <summary>Names every field that nobody asked for.</summary>
     public void Close()
     {
-        foreach (JsonField field in _written.Values.Where(field => !_known.Contains(field.Name)))
+        foreach (JsonField field in Node.Fields)
         {
-            string[] left = [.. _known.Distinct().Where(known => !_written.ContainsKey(known) && !_refused.Contains(known))];
-            Faults.Add(field.Spot, Node.PathOf(field.Name), field.Value?.Shown, Wording.Unknown("field", field.Name, left));
+            if (!field.IsKnown)
+            {
+                string[] left = [.. _asked.Select(asked => asked.Name).Distinct().Where(name => Written(name, Node.Fields) is null && !_asked.Contains((name, true)))];
+                Faults.Add(field.Spot, Node.PathOf(field.Name), field.Value?.Shown, Wording.Unknown("field", field.Name, left));
+            }
         }
+    }
+
+    private JsonTree? TakeRefused(string name)
+    {
+        _asked.Add((name, true));
+        return Take(name);
+    }
+
+    private JsonField? Written(string name, ReadOnlySpan<JsonField> among)
+    {
+        if (_byName is not null)
+        {
+            return _byName.GetValueOrDefault(name);
+        }
+
+        foreach (JsonField field in among)
+        {
+            if (field.Name == name)
+            {
+                return field;
+            }
+        }
+
+        return null;
     }
 
     private bool Is(JsonTree value, JsonKind kind, string right)

@@ -13,7 +13,7 @@ public static class JobWords
     public const int Version = 1;
 
     /// <summary><c>stage</c>, in order of time.</summary>
-    public static WordList<Stage> Stages { get; } = new([.. Enum.GetValues<Stage>().Select(stage => (StageWords.Of(stage), stage))]);
+    public static WordList<Stage> Stages { get; } = new(Array.ConvertAll(Enum.GetValues<Stage>(), stage => (StageWords.Of(stage), stage)));
 
     /// <summary><c>cycle</c>.</summary>
     public static WordList<EngineCycle> Cycles { get; } = new(("four-stroke", EngineCycle.FourStroke), ("two-stroke", EngineCycle.TwoStroke));
@@ -51,7 +51,7 @@ public static class JobWords
     public static WordList<Valve> Valves { get; } = new(("inlet", Valve.Inlet), ("exhaust", Valve.Exhaust));
 
     /// <summary><c>what</c> of cuts and process.</summary>
-    public static WordList<CutKind> Cuts { get; } = new([.. Enum.GetValues<CutKind>().Select(kind => (CutWords.Of(kind), kind))]);
+    public static WordList<CutKind> Cuts { get; } = new(Array.ConvertAll(Enum.GetValues<CutKind>(), kind => (CutWords.Of(kind), kind)));
 
     /// <summary>The word for a depth or a pin end.</summary>
     public static string WordFor(At at) => at is At.Front or At.Rear ? PinEnds.WordFor(at) : Depths.WordFor(at);

@@ -1,3 +1,5 @@
+using System.Runtime.InteropServices;
+
 namespace RebuildPlanner.Core.JobFile;
 
 /// <summary>What kind of JSON value a node is.</summary>
@@ -20,6 +22,8 @@ internal sealed class JsonTree
     private readonly JsonTree? _parent;
     private readonly string? _name;
     private readonly int _index;
+    private List<JsonField>? _fields;
+    private List<JsonTree>? _items;
 
     private JsonTree(JsonTree? parent, string? name, int index, JsonKind kind, string text, JsonSpot spot)
     {
@@ -34,9 +38,9 @@ internal sealed class JsonTree
     public JsonSpot Spot { get; }
 
     /// <summary>Fields of an object in file order, the same name perhaps twice.</summary>
-    public List<JsonField> Fields { get; } = [];
+    public ReadOnlySpan<JsonField> Fields => CollectionsMarshal.AsSpan(_fields);
 
-    public List<JsonTree> Items { get; } = [];
+    public IReadOnlyList<JsonTree> Items => _items ?? (IReadOnlyList<JsonTree>)[];
 
     /// <summary>Such as <c>readings[3].value</c>, counted from 0; empty for the whole file.</summary>
     public string Path => _parent is null ? "" : _name is null ? $"{_parent.Path}[{_index}]" : PathOf(_name, _parent);
@@ -52,17 +56,25 @@ internal sealed class JsonTree
 
     public static JsonTree Under(JsonTree? parent, JsonField? field, JsonKind kind, string text, JsonSpot spot)
     {
-        JsonTree node = new(parent, field?.Name, parent?.Items.Count ?? 0, kind, text, spot);
+        JsonTree node = new(parent, field?.Name, parent?._items?.Count ?? 0, kind, text, spot);
         if (field is not null)
         {
             field.Value = node;
         }
-        else
+        else if (parent is not null)
         {
-            parent?.Items.Add(node);
+            (parent._items ??= []).Add(node);
         }
 
         return node;
+    }
+
+    /// <summary>Begins a field, whose value comes next.</summary>
+    public JsonField Begin(string name, JsonSpot spot)
+    {
+        JsonField field = new(name, spot);
+        (_fields ??= []).Add(field);
+        return field;
     }
 
     public string PathOf(string field) => PathOf(field, this);
@@ -94,6 +106,9 @@ internal sealed class JsonField(string name, JsonSpot spot)
     public string Name => name;
 
     public JsonSpot Spot => spot;
+
+    /// <summary>Whether whoever reads the object has asked for it.</summary>
+    public bool IsKnown { get; set; }
 
     /// <summary>Null only where the text breaks off before the value.</summary>
     public JsonTree? Value { get; set; }

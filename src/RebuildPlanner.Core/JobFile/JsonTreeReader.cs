@@ -10,9 +10,11 @@ internal ref struct JsonTreeReader
 {
     // Deeper than any job file by far; a bound at all keeps a hostile text from eating memory.
     private const int DeepestNesting = 32;
+    private const int Remembered = 127;
 
     private readonly ReadOnlySpan<byte> _utf8;
     private readonly Stack<JsonTree> _open = new();
+    private readonly string?[] _seen = new string?[Remembered];
     private Utf8JsonReader _reader;
     private JsonTree? _root;
     private JsonField? _field;
@@ -74,8 +76,7 @@ internal ref struct JsonTreeReader
         switch (_reader.TokenType)
         {
             case JsonTokenType.PropertyName:
-                _field = new(_reader.GetString()!, _spot);
-                _open.Peek().Fields.Add(_field);
+                _field = _open.Peek().Begin(Text(), _spot);
                 break;
             case JsonTokenType.StartObject:
                 _open.Push(Add(JsonKind.Object, ""));
@@ -87,7 +88,7 @@ internal ref struct JsonTreeReader
                 _open.Pop();
                 break;
             case JsonTokenType.String:
-                Add(JsonKind.Text, _reader.GetString()!);
+                Add(JsonKind.Text, Text());
                 break;
             case JsonTokenType.Number:
                 Add(JsonKind.Number, Encoding.UTF8.GetString(_reader.ValueSpan));
@@ -99,6 +100,14 @@ internal ref struct JsonTreeReader
                 Add(JsonKind.Flag, _reader.TokenType == JsonTokenType.True ? "true" : "false");
                 break;
         }
+    }
+
+    // Field names, stages, gauges and cylinders come again in every reading; each is made once, or again when another has taken its place.
+    private string Text()
+    {
+        ReadOnlySpan<byte> written = _reader.ValueSpan;
+        int slot = (written.Length + (written.Length == 0 ? 0 : (31 * written[0]) + (7 * written[^1]))) % Remembered;
+        return _seen[slot] is { } seen && _reader.ValueTextEquals(seen) ? seen : _seen[slot] = _reader.GetString()!;
     }
 
     private JsonTree Add(JsonKind kind, string text)

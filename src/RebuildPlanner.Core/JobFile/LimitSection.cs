@@ -86,7 +86,7 @@ internal static class LimitSection
         {
             if (!allowed)
             {
-                fields.Refuse(key, $"'{key}' is not told of {subject.Word}");
+                fields.NotToldOf(subject.Word, key);
             }
         }
 

@@ -72,7 +72,7 @@ internal static class PlaceSection
     {
         if (!allowed)
         {
-            fields.Refuse(key, $"'{key}' is not told of {line.Word}");
+            fields.NotToldOf(line.Word, key);
         }
     }
 

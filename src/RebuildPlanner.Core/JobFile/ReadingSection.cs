@@ -41,7 +41,7 @@ internal static class ReadingSection
         bool takesDrop = line.Keys.HasFlag(PlaceKeys.Drop);
         if (!takesDrop)
         {
-            fields.Refuse("drop", $"'drop' is not told of {line.Word}");
+            fields.NotToldOf(line.Word, "drop");
         }
 
         (EquatableList<Fill> fills, bool fromToWritten) = FillSection.Read(fields, line);

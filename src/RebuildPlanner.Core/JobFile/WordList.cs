@@ -7,7 +7,7 @@ public sealed class WordList<T>(params (string Word, T Meaning)[] entries)
     where T : struct
 {
     /// <summary>The words, in order.</summary>
-    public IReadOnlyList<string> Words { get; } = [.. entries.Select(entry => entry.Word)];
+    public IReadOnlyList<string> Words { get; } = Array.ConvertAll(entries, entry => entry.Word);
 
     /// <summary>What a word stands for, or null for a word not on the list.</summary>
     public T? Find(string word)

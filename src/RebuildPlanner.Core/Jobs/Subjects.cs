@@ -24,7 +24,7 @@ public static class Subjects
         Of(Derived.Taper, "taper", QuantityKind.Length, 0, 5),
         Of(Derived.OutOfRound, "out-of-round", QuantityKind.Length, 0, 5),
         Of(Derived.GasketOverhang, "gasket overhang", QuantityKind.Length, -10, 50),
-        .. WhatTable.Lines.Where(line => line.Rule.Kinds.Contains(QuantityKind.Length)).Select(Of),
+        .. Lengths(),
     ];
 
     /// <summary>The subject with the given word, spelled exactly, or null.</summary>
@@ -41,5 +41,14 @@ public static class Subjects
         new(derived, null, word, new([kind], SignWords.None, low, high));
 
     // A limit on an opening is a limit on its diameter: no traced area has one bound that means anything to a bore.
-    private static Subject Of(WhatLine line) => new(null, line.What, line.Word, line.Rule with { Kinds = [QuantityKind.Length] });
+    private static IEnumerable<Subject> Lengths()
+    {
+        foreach (WhatLine line in WhatTable.Lines)
+        {
+            if (line.Rule.Kinds.Contains(QuantityKind.Length))
+            {
+                yield return new(null, line.What, line.Word, line.Rule with { Kinds = [QuantityKind.Length] });
+            }
+        }
+    }
 }

@@ -18,18 +18,24 @@ internal sealed class PlacesRead
     {
         _engine = job.Engine;
         _cylindersOfHead = _engine.Heads.ToDictionary(head => head.Label, head => head.Cylinders);
-        ILookup<string, (string Cylinder, Stage Since)> fitted = Fitted(job, stage);
-        Reading[] standing = [.. job.Readings.Where(reading => reading.Struck is null)];
-        _read =
-        [
-            .. standing.Where(reading => reading.Place.Piece is null && reading.Stage == stage).Select(reading => (reading.What, Unnamed(reading))),
+        _read = [];
+        _heightOf = [];
+        List<(string Piece, string Cylinder, Stage Since)> fitted = Fitted(job, stage);
+        foreach (Reading reading in job.Readings)
+        {
+            if (reading.Struck is null)
+            {
+                Take(reading, stage, fitted);
+            }
+        }
 
-            // A piece is measured on the bench; in the engine it counts from the stage it was fitted at, or read at if that was later.
-            .. standing.Where(reading => reading.Place.Piece is not null).SelectMany(
-                reading => fitted[reading.Place.Piece!].Where(piece => (reading.Stage > piece.Since ? reading.Stage : piece.Since) == stage),
-                (reading, piece) => (reading.What, reading.Place with { Piece = null, Cylinder = piece.Cylinder })),
-        ];
-        _heightOf = Heights(job, standing, stage);
+        foreach (StatedFigure figure in job.Given.Concat(job.Assumed))
+        {
+            if (figure.Stage == stage)
+            {
+                TakeHeight(figure.What, figure.Place);
+            }
+        }
     }
 
     /// <summary>The place in the word its cylinder was begun in: a deck and a protrusion of one cylinder and stage are refused together.</summary>
@@ -72,28 +78,57 @@ internal sealed class PlacesRead
         };
     }
 
-    private static ILookup<string, (string Cylinder, Stage Since)> Fitted(Job job, Stage stage)
+    private void Take(Reading reading, Stage stage, List<(string Piece, string Cylinder, Stage Since)> fitted)
     {
-        EngineParts parts = new(job, stage);
-        return job.Engine.Labels
-            .Select((label, index) => (Label: label, Piston: parts.Piston(index, stage)))
-            .Where(cylinder => cylinder.Piston?.Piece is not null)
-            .ToLookup(cylinder => cylinder.Piston!.Piece!, cylinder => (cylinder.Label, cylinder.Piston!.Since));
+        if (reading.Stage == stage)
+        {
+            TakeHeight(reading.What, reading.Place);
+        }
+
+        if (reading.Place.Piece is null)
+        {
+            if (reading.Stage == stage)
+            {
+                _read.Add((reading.What, Unnamed(reading)));
+            }
+
+            return;
+        }
+
+        // A piece is measured on the bench; in the engine it counts from the stage it was fitted at, or read at if that was later.
+        foreach ((string piece, string cylinder, Stage since) in fitted)
+        {
+            if (piece == reading.Place.Piece && (reading.Stage > since ? reading.Stage : since) == stage)
+            {
+                _read.Add((reading.What, reading.Place with { Piece = null, Cylinder = cylinder }));
+            }
+        }
     }
 
-    private static Dictionary<string, What> Heights(Job job, IEnumerable<Reading> standing, Stage stage)
+    // The first word a cylinder was begun in stands.
+    private void TakeHeight(What what, Place place)
     {
-        Dictionary<string, What> heightOf = [];
-        IEnumerable<(What What, Place Place)> begun = standing.Where(reading => reading.Stage == stage).Select(reading => (reading.What, reading.Place))
-            .Concat(job.Given.Concat(job.Assumed).Where(figure => figure.Stage == stage).Select(figure => (figure.What, figure.Place)));
-        foreach ((What what, Place place) in begun.Where(entry => entry.What is What.Deck or What.PistonProtrusion))
+        if (what is What.Deck or What.PistonProtrusion)
         {
-            foreach (string cylinder in place.Cylinder is { } one ? [one] : job.Engine.Labels)
+            foreach (string cylinder in place.Cylinder is { } one ? [one] : _engine.Labels)
             {
-                heightOf.TryAdd(cylinder, what);
+                _heightOf.TryAdd(cylinder, what);
+            }
+        }
+    }
+
+    private static List<(string Piece, string Cylinder, Stage Since)> Fitted(Job job, Stage stage)
+    {
+        EngineParts parts = new(job, stage);
+        List<(string, string, Stage)> fitted = [];
+        for (int cylinder = 0; cylinder < job.Engine.Labels.Count; cylinder++)
+        {
+            if (parts.Piston(cylinder, stage) is { Piece: { } piece } piston)
+            {
+                fitted.Add((piece, job.Engine.Labels[cylinder], piston.Since));
             }
         }
 
-        return heightOf;
+        return fitted;
     }
 }

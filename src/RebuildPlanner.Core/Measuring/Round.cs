@@ -74,7 +74,15 @@ public static class Round
         return [.. Of(job.Engine).Select(read.AsBegun).Where(place => !read.Has(place))];
     }
 
-    private static IEnumerable<RoundPlace> Each(What what, IEnumerable<Place> places) => places.Select(place => new RoundPlace(what, place, ForRatio: true));
+    private static IEnumerable<RoundPlace> Each(What what, IEnumerable<Place> places) => Asked(what, places, forRatio: true);
 
-    private static IEnumerable<RoundPlace> Fits(What what, IEnumerable<Place> places) => places.Select(place => new RoundPlace(what, place, ForRatio: false));
+    private static IEnumerable<RoundPlace> Fits(What what, IEnumerable<Place> places) => Asked(what, places, forRatio: false);
+
+    private static IEnumerable<RoundPlace> Asked(What what, IEnumerable<Place> places, bool forRatio)
+    {
+        foreach (Place place in places)
+        {
+            yield return new RoundPlace(what, place, forRatio);
+        }
+    }
 }

@@ -48,7 +48,7 @@ public class JsonTreeTests
     {
         JsonTree tree = JsonTreeReader.Read("{ // one\r\n\"a\": /* two\nthree */ 1,\n\"b\": [\n2,\n] }"u8, out _)!;
 
-        Assert.Equal([3, 4], tree.Fields.Select(field => field.Value!.Spot.Line));
+        Assert.Equal([3, 4], tree.Fields.ToArray().Select(field => field.Value!.Spot.Line));
         Assert.Equal((5, "b[0]"), (tree.Fields[1].Value!.Items[0].Spot.Line, tree.Fields[1].Value!.Items[0].Path));
     }
 

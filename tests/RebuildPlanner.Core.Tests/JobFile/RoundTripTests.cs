@@ -107,7 +107,7 @@ public class RoundTripTests
 
     private static IEnumerable<string> Leaves(JsonTree node) => node.Kind switch
     {
-        JsonKind.Object => node.Fields.SelectMany(field => Leaves(field.Value!)),
+        JsonKind.Object => node.Fields.ToArray().SelectMany(field => Leaves(field.Value!)),
         JsonKind.List => node.Items.SelectMany(Leaves),
         JsonKind.Nothing => [],
         _ => [$"{node.Path}={node.Text}"],
