@@ -167,6 +167,7 @@ public sealed class JobStore : IDisposable
 
     private static SqliteConnection Connect(string path)
     {
+        SqliteLibrary.SeekBesideProgram();
         SqliteConnection connection = new(new SqliteConnectionStringBuilder { DataSource = path, ForeignKeys = true, DefaultTimeout = 5, Pooling = false }.ToString());
         connection.Open();
         return connection;

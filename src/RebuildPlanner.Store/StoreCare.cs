@@ -126,7 +126,7 @@ public static class StoreCare
     {
         using SqliteConnection fresh = new("Data Source=:memory:");
         fresh.Open();
-        foreach (string script in Schema.Scripts)
+        foreach (string script in Schema.Scripts())
         {
             Sql.Run(fresh, script);
         }
