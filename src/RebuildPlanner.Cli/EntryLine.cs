@@ -25,13 +25,24 @@ internal static class EntryLine
 
     private static string Said(JsonElement element, string? without = null) => element.ValueKind switch
     {
-        JsonValueKind.Object => string.Join(", ", element.EnumerateObject().Where(field => field.Value.ValueKind != JsonValueKind.Null && field.Name != without).Select(Said)),
+        JsonValueKind.Object => string.Join(", ", Fields(element, without)),
         JsonValueKind.Array => string.Join("; ", element.EnumerateArray().Select(row => Said(row))),
         JsonValueKind.String => element.GetString()!,
         JsonValueKind.True => "yes",
         JsonValueKind.False => "no",
         _ => element.GetRawText(),
     };
+
+    private static IEnumerable<string> Fields(JsonElement element, string? without)
+    {
+        foreach (JsonProperty field in element.EnumerateObject())
+        {
+            if (field.Value.ValueKind != JsonValueKind.Null && field.Name != without)
+            {
+                yield return Said(field);
+            }
+        }
+    }
 
     // What a thing is and its figure speak for themselves; of the rest the name is said too.
     private static string Said(JsonProperty field) =>

@@ -32,12 +32,12 @@ internal sealed class ExampleHelp(HelpAction help) : SynchronousCommandLineActio
         return code;
     }
 
-    /// <summary>Lets every command of a root end its help so.</summary>
-    public static void AddTo(RootCommand root)
+    /// <summary>The option that asks for it, of a root and all its commands.</summary>
+    public static Option<bool> Option() => new("--help", "-?", "-h", "/?", "/h")
     {
-        foreach (HelpOption option in root.Options.OfType<HelpOption>())
-        {
-            option.Action = new ExampleHelp((HelpAction)option.Action!);
-        }
-    }
+        Description = "Show help and usage information",
+        Recursive = true,
+        Arity = ArgumentArity.Zero,
+        Action = new ExampleHelp(new HelpAction()),
+    };
 }

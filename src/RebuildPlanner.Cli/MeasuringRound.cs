@@ -318,7 +318,7 @@ internal sealed class MeasuringRound(JobStore store, string number, Stage stage,
     {
         terminal.Output.Write(text);
         terminal.Output.Flush();
-        return terminal.Input.ReadLine()?.Trim();
+        return terminal.Input().ReadLine()?.Trim();
     }
 
     private void Say(string text) => terminal.Output.WriteLine(text);

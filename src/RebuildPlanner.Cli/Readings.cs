@@ -87,13 +87,21 @@ internal static class Readings
     /// <summary>The shop's gauges that readings name and the job has no copy of yet.</summary>
     private static List<Entry> GaugesOf(JobStore store, IReadOnlyList<Entry> before, IReadOnlyList<Entry> readings, Terminal terminal)
     {
-        HashSet<string> known = [.. before.Where(entry => entry.Kind == EntryKind.Gauge).Select(entry => JsonText.Field(entry.Body, "id")).OfType<string>()];
-        List<Entry> copied = [];
-        foreach (string name in readings.Select(reading => JsonText.Field(reading.Body, "gauge")).OfType<string>().Distinct())
+        HashSet<string?> known = [];
+        foreach (Entry entry in before)
         {
-            foreach (string body in known.Contains(name) ? [] : GaugeCommand.WithSetters(store, name))
+            if (entry.Kind == EntryKind.Gauge)
             {
-                if (known.Add(JsonText.Field(body, "id")!))
+                known.Add(JsonText.Field(entry.Body, "id"));
+            }
+        }
+
+        List<Entry> copied = [];
+        foreach (Entry reading in readings)
+        {
+            foreach (string body in JsonText.Field(reading.Body, "gauge") is { } name && !known.Contains(name) ? GaugeCommand.WithSetters(store, name) : [])
+            {
+                if (known.Add(JsonText.Field(body, "id")))
                 {
                     copied.Add(new Entry(WriteOptions.NewKey(terminal), EntryKind.Gauge, body, terminal.Now()));
                 }

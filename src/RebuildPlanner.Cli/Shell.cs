@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.CommandLine.Help;
 using System.CommandLine.Parsing;
 using RebuildPlanner.Core.Quantities;
 using RebuildPlanner.Store;
@@ -12,7 +13,7 @@ public static class Shell
     /// <returns>The exit code, see <see cref="ExitCode"/>.</returns>
     public static int Run(string[] args, Terminal terminal)
     {
-        RootCommand root = Commands(terminal, args);
+        Command root = Commands(terminal, args);
         ParseResult parsed = root.Parse(args, new ParserConfiguration { ResponseFileTokenReplacer = null });
         if (StrangeOption(args, parsed) is { } strange)
         {
@@ -54,18 +55,28 @@ public static class Shell
     private static string? StrangeOption(string[] args, ParseResult parsed)
     {
         Command command = parsed.CommandResult.Command;
-        string[] known = [.. command.Options.Concat(parsed.RootCommandResult.Command.Options).SelectMany(option => option.Aliases.Prepend(option.Name))];
-        string? strange = args.TakeWhile(arg => arg != "--").Select(arg => arg.Split('=')[0])
-            .FirstOrDefault(arg => arg.Length > 2 && arg.StartsWith("--", StringComparison.Ordinal) && !arg.Contains(' ', StringComparison.Ordinal) && !known.Contains(arg));
+        List<string> known = [];
+        foreach (Option option in (IEnumerable<Option>)[.. command.Options, .. parsed.RootCommandResult.Command.Options])
+        {
+            known.Add(option.Name);
+            known.AddRange(option.Aliases);
+        }
+
+        string? strange = Array.Find(
+            args[..(Array.IndexOf(args, "--") is var end and >= 0 ? end : args.Length)],
+            arg => arg.Length > 2 && arg.StartsWith("--", StringComparison.Ordinal) && !Named(arg).Contains(' ', StringComparison.Ordinal) && !known.Contains(Named(arg)));
         if (strange is null)
         {
             return null;
         }
 
+        strange = Named(strange);
         string? near = NearestWord.Of(strange, known);
-        string name = command is RootCommand ? "" : $" {command.Name}";
+        string name = command == parsed.RootCommandResult.Command ? "" : $" {command.Name}";
         return $"{strange}: there is no such option here{(near is null ? "." : $"; did you mean {near}?")} See rebuild{name} --help.";
     }
+
+    private static string Named(string arg) => arg.Split('=')[0];
 
     // Every command by its word; only the one asked for is made, unless help or completion wants them all.
     private static readonly (string Word, Func<Terminal, Command> Make)[] _commands =
@@ -100,19 +111,26 @@ public static class Shell
         ("completions", CompletionsCommand.Make),
     ];
 
-    private static RootCommand Commands(Terminal terminal, string[] args)
+    private static Command Commands(Terminal terminal, string[] args)
     {
-        RootCommand root = new("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.");
-        bool one = args.Length > 0 && Array.Exists(_commands, command => command.Word == args[0]);
-        foreach ((string word, Func<Terminal, Command> make) in _commands)
+        Func<Terminal, Command>? asked = args.Length > 0 ? Array.Find(_commands, command => command.Word == args[0]).Make : null;
+        Command root;
+        if (asked is not null)
         {
-            if (!one || word == args[0])
+            // What a command needs of the library's root; the rest looks for words and names of its own for half a millisecond.
+            root = new Command("rebuild") { ExampleHelp.Option(), asked(terminal) };
+        }
+        else
+        {
+            root = new RootCommand("Rebuild Planner: what a measured engine is, how sure that is, and which limits hold.");
+            root.Options.Remove(root.Options.OfType<HelpOption>().Single());
+            root.Options.Insert(0, ExampleHelp.Option());
+            foreach ((_, Func<Terminal, Command> make) in _commands)
             {
                 root.Subcommands.Add(make(terminal));
             }
         }
 
-        ExampleHelp.AddTo(root);
         return root;
     }
 }

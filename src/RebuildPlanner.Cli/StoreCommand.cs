@@ -71,7 +71,7 @@ public static class StoreCommand
         command.SetAction(parsed =>
         {
             string path = storeOption.Path(parsed, terminal);
-            string? kept = StoreCare.Restore(parsed.GetValue(from)!, path, terminal.Now());
+            string? kept = StoreCare.Restore(parsed.GetValue(from)!, path, terminal.Now().ToLocalTime());
             terminal.Output.WriteLine(kept is null ? path : $"{path}; what stood there is {kept}");
             return ExitCode.Done;
         });

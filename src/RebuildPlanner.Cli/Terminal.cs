@@ -8,15 +8,15 @@ namespace RebuildPlanner.Cli;
 /// <param name="Error">Standard error.</param>
 /// <param name="WidthColumns">How wide the output is, columns.</param>
 /// <param name="IsScreen">True on a real terminal, where weight and colour mean something.</param>
-/// <param name="Now">The time it is.</param>
+/// <param name="Now">The time it is; told in the place's own hours only where it is shown, since the system's table of them is slow to read.</param>
 /// <param name="DataFolder">Where the user's own templates and jobs are kept, or null for nowhere.</param>
 public sealed record Terminal(TextWriter Output, TextWriter Error, int WidthColumns, bool IsScreen, Func<DateTimeOffset> Now, string? DataFolder)
 {
     /// <summary>The day it is.</summary>
     public DateOnly Today => DateOnly.FromDateTime(Now().LocalDateTime);
 
-    /// <summary>Standard input.</summary>
-    public TextReader Input { get; init; } = TextReader.Null;
+    /// <summary>Standard input, opened when a command first reads of it, which few do.</summary>
+    public Func<TextReader> Input { get; init; } = () => TextReader.Null;
 
     // Set, it moves the data folder; else it is where the system keeps what programs keep for a user.
     private const string DataFolderVariable = "REBUILD_PLANNER_DATA", DataFolderName = "rebuild-planner";
@@ -31,9 +31,9 @@ public sealed record Terminal(TextWriter Output, TextWriter Error, int WidthColu
         bool screen = !Console.IsOutputRedirected;
         return new Terminal(
             Console.Out, Console.Error, screen ? Math.Max(40, Console.WindowWidth) : UsualWidthColumns, screen,
-            () => DateTimeOffset.Now, OwnDataFolder())
+            () => DateTimeOffset.UtcNow, OwnDataFolder())
         {
-            Input = Console.In,
+            Input = () => Console.In,
         };
     }
 

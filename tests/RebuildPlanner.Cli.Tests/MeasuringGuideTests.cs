@@ -33,7 +33,8 @@ public sealed partial class MeasuringGuideTests : IDisposable
         Assert.Equal(51, typed.Count);
         Screen.At(_scratch["data"], "start", "2026-080", "--from", "inline-four-overhead-cam", "--customer", "Low Fen Drainage");
         using StringWriter screen = new() { NewLine = "\n" };
-        Terminal terminal = new(screen, screen, Terminal.UsualWidthColumns, IsScreen: false, () => Screen.Now, _scratch["data"]) { Input = new Keyboard(typed, screen) };
+        Keyboard keyboard = new(typed, screen);
+        Terminal terminal = new(screen, screen, Terminal.UsualWidthColumns, IsScreen: false, () => Screen.Now, _scratch["data"]) { Input = () => keyboard };
 
         int code = Shell.Run(["measure", "2026-080", "--stage", "as received"], terminal);
 

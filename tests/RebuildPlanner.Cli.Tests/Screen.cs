@@ -14,7 +14,8 @@ internal sealed record Screen(int ExitCode, string Output, string Error)
     public static Screen Typed(string? dataFolder, string[] lines, params string[] args)
     {
         using StringWriter output = new() { NewLine = "\n" }, error = new() { NewLine = "\n" };
-        int code = Shell.Run(args, new Terminal(output, error, Terminal.UsualWidthColumns, IsScreen: false, () => Now, dataFolder) { Input = new StringReader(string.Join('\n', lines)) });
+        using StringReader input = new(string.Join('\n', lines));
+        int code = Shell.Run(args, new Terminal(output, error, Terminal.UsualWidthColumns, IsScreen: false, () => Now, dataFolder) { Input = () => input });
         return new Screen(code, output.ToString().ReplaceLineEndings("\n"), error.ToString().ReplaceLineEndings("\n"));
     }
 

