@@ -22,6 +22,7 @@ public static class SheetCommand
           0  done
           1  done, and some verdict is outside
           2  the request or the file is wrong; what would be right is said
+          3  the store could not be read or written; what to do is said
         """;
 
     /// <summary>Makes the command.</summary>

@@ -94,6 +94,7 @@ public static class Shell
         ("gasket", GasketCommand.Make),
         ("fit", FitCommand.Make),
         ("cut", CutCommand.Make),
+        ("process", ProcessCommand.Make),
         ("limit", LimitCommand.Make),
         ("target", TargetCommand.Make),
         ("check", CheckCommand.Make),

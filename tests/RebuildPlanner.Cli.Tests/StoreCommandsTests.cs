@@ -72,6 +72,8 @@ public sealed class StoreCommandsTests : IDisposable
         Run("piston", "2026-090", "std", "--compression-height", "30 mm ± 0.03 mm", "--piece", "P1", "--piece", "P2", "--price", "81.50", "--not-on-offer");
         Run("fit", "2026-090", "--gasket", "G1", "--piston", "std", "--stage", "as received");
         Run("cut", "2026-090", "head skim", "--value", "0.20 mm ± 0.02 mm", "--stage", "before");
+        Run("process", "2026-090", "sleeve", "--tolerance", "0.008 mm", "--step", "0.01 mm", "--max", "0.6 mm", "--clean-up", "0.06 mm", "--hone-stock", "0.10 mm", "--offset", "0.02 mm");
+        Screen twice = Run("process", "2026-090", "sleeve", "--tolerance", "0.01 mm");
         Run("target", "2026-090", "compression ratio", "--min", "9.0", "--max", "9.5");
         Run("limit", "2026-090", "piston to head", "--min", "1.0 mm", "--level", "0.975", "--stage", "as received");
         Run("check", "2026-090", "crack test", "--result", "none found", "--stage", "as received");
@@ -91,6 +93,11 @@ public sealed class StoreCommandsTests : IDisposable
         Assert.Equal((What.Chamber, 2), (job.Readings[^1].What, job.Readings[^1].Fills.Count));
         Assert.False(job.Readings[0].TorquePlate);
         Assert.Equal((CutKind.HeadSkim, Stage.Before), (job.Cuts[0].Kind, job.Cuts[0].Stage));
+        Process sleeve = Assert.Single(job.Processes, process => process.Kind == CutKind.Sleeve);
+        Assert.Equal((0.008, 0.06, 0.10), (sleeve.Tolerance!.Value, sleeve.CleanUp!.Value, sleeve.HoneStock!.Value));
+        Assert.Equal((0.01, 0.6, 0.02), (sleeve.Step!.Value, sleeve.Max!.Value, sleeve.Offset!.Value));
+        Assert.Equal(2, twice.ExitCode);
+        Assert.Contains("write it once", twice.Error, StringComparison.Ordinal);
         Assert.Contains("Compression ratio", Run("results", "2026-090").Output, StringComparison.Ordinal);
         Screen show = Run("show", "2026-090");
         Assert.Contains("readings      as received: bore 1, deck 1, chamber 1", show.Output, StringComparison.Ordinal);
