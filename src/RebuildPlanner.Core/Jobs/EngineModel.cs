@@ -72,11 +72,10 @@ public sealed class EngineModel
     }
 
     /// <summary>Of these, the doubts that have a distribution or bar proof: all that first order reads.</summary>
-    public ReadOnlySpan<Term> DoubtsOf(int cylinder, int input)
-    {
-        int estimate = EstimateIndex(cylinder, input);
-        return _terms.AsSpan(_firstTerm[estimate].._firstWorstOnly[estimate]);
-    }
+    public ReadOnlySpan<Term> DoubtsOf(int cylinder, int input) => DoubtsOf(EstimateIndex(cylinder, input));
+
+    /// <inheritdoc cref="DoubtsOf(int, int)"/>
+    public ReadOnlySpan<Term> DoubtsOf(int estimate) => _terms.AsSpan(_firstTerm[estimate].._firstWorstOnly[estimate]);
 
     /// <summary>The best values of one cylinder's inputs.</summary>
     public void Values(int cylinder, out CylinderFigures<Real> figures)
@@ -95,5 +94,9 @@ public sealed class EngineModel
             .Select(same => new Term(same.Key.Source, same.Sum(term => term.Coefficient), same.Key.What))
             .Where(term => term.Coefficient != 0.0);
 
-    private int EstimateIndex(int cylinder, int input) => _estimateOf[(cylinder * CylinderFigures<Real>.Count) + input];
+    /// <summary>How many distinct estimates there are.</summary>
+    public int EstimateCount => _estimates.Length;
+
+    /// <summary>Which estimate one input of one cylinder is.</summary>
+    public int EstimateIndex(int cylinder, int input) => _estimateOf[(cylinder * CylinderFigures<Real>.Count) + input];
 }

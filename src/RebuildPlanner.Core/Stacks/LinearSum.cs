@@ -17,11 +17,30 @@ public sealed class LinearSum
     /// <param name="row">The figure's row, its unit per unit of each source.</param>
     public LinearSum(ReadOnlySpan<Source> sources, ReadOnlySpan<double> row)
     {
+        if (!Takes(sources, row))
+        {
+            throw new ArgumentException("The sum of a triangular, arcsine or curvilinear trapezoid doubt is drawn, not inverted.", nameof(row));
+        }
+
         StandardUncertainty = Propagation.StandardUncertainty(sources, row);
         _parts = Components.Of(sources, row);
         int apart = WidestApart(_parts);
         _apart = _parts.HalfWidths[..apart];
         _rest = TailOf(_parts.Without(apart), _apart);
+    }
+
+    /// <summary>Whether the sum of a row is of shapes whose laws are added here.</summary>
+    public static bool Takes(ReadOnlySpan<Source> sources, ReadOnlySpan<double> row)
+    {
+        for (int s = 0; s < sources.Length; s++)
+        {
+            if (row[s] != 0.0 && sources[s].Shape is SourceShape.Triangular or SourceShape.Arcsine or SourceShape.CurvilinearTrapezoid)
+            {
+                return false;
+            }
+        }
+
+        return true;
     }
 
     /// <summary>The first-order standard uncertainty u, in the figure's unit; of a pool s counts, not the wider t.</summary>

@@ -57,6 +57,23 @@ public static class Propagation
     public static double StandardUncertainty(ReadOnlySpan<Source> sources, ReadOnlySpan<double> row) =>
         Math.Sqrt(Covariance(sources, row, row));
 
+    /// <summary>The variance of the linear sum by the laws of its parts, the figure's unit squared: a pool's t is wider than its s.</summary>
+    /// <remarks>Σ a_s²·u_s², a pool's terms times ν/(ν − 2); without bound for ν ≤ 2. Source: jcgm101 (6.4.9). Valid for: every row. Error: rounding.</remarks>
+    public static double VarianceOfLaws(ReadOnlySpan<Source> sources, ReadOnlySpan<double> row)
+    {
+        double variance = 0.0;
+        for (int s = 0; s < sources.Length; s++)
+        {
+            double own = sources[s].IsDrawn ? Variance(sources[s], row[s]) : 0.0, freedom = sources[s].DegreesOfFreedom;
+            if (own > 0.0)
+            {
+                variance += double.IsPositiveInfinity(freedom) ? own : freedom > 2.0 ? own * freedom / (freedom - 2.0) : double.PositiveInfinity;
+            }
+        }
+
+        return variance;
+    }
+
     /// <summary>Adds an estimate's doubts, times a factor, to a row in the figure's unit per unit of each source.</summary>
     /// <param name="row">The row that is added to.</param>
     /// <param name="estimate">The estimate whose terms are added.</param>

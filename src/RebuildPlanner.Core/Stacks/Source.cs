@@ -17,6 +17,15 @@ public enum SourceShape
 
     /// <summary>One normal of a pool of repeats: t with the pool's degrees of freedom, one scale for the whole pool.</summary>
     Pooled,
+
+    /// <summary>Triangular between −u√6 and +u√6, as the sum of two equal rectangles.</summary>
+    Triangular,
+
+    /// <summary>Arcsine between −u√2 and +u√2: what swings between two ends.</summary>
+    Arcsine,
+
+    /// <summary>A rectangle whose own ends are known only within limits.</summary>
+    CurvilinearTrapezoid,
 }
 
 /// <summary>One independent doubt, centred on zero. Its identity is its index in the model: correlation is nothing but a shared source.</summary>
@@ -44,6 +53,23 @@ public readonly record struct Source(
     /// <summary>The doubt of a mean of repeats whose spread comes from a pool.</summary>
     public static Source Pooled(double standardUncertainty, int pool, double degreesOfFreedom, double worstLow, double worstHigh) =>
         new(SourceShape.Pooled, standardUncertainty, degreesOfFreedom, pool, worstLow, worstHigh);
+
+    /// <summary>A triangular doubt of the given half-width.</summary>
+    public static Source Triangular(double halfWidth) =>
+        new(SourceShape.Triangular, halfWidth / Math.Sqrt(6.0), double.PositiveInfinity, -1, -halfWidth, halfWidth);
+
+    /// <summary>An arcsine doubt of the given half-width.</summary>
+    public static Source Arcsine(double halfWidth) =>
+        new(SourceShape.Arcsine, halfWidth / Math.Sqrt(2.0), double.PositiveInfinity, -1, -halfWidth, halfWidth);
+
+    /// <summary>A rectangular doubt of the given half-width, its ends known within ± <paramref name="inexact"/>.</summary>
+    /// <remarks>u² = a²/3 + d²/9. Source: jcgm101 (6.4.3.4).</remarks>
+    public static Source CurvilinearTrapezoid(double halfWidth, double inexact) => new(
+        SourceShape.CurvilinearTrapezoid, Math.Sqrt((halfWidth * halfWidth / 3.0) + (inexact * inexact / 9.0)), double.PositiveInfinity, -1,
+        -halfWidth - inexact, halfWidth + inexact);
+
+    /// <summary>Whether the doubt is drawn in a trial: it has a law and a spread.</summary>
+    public bool IsDrawn => Shape is not (SourceShape.None or SourceShape.Unstated) && StandardUncertainty > 0.0;
 
     /// <summary>A doubt that counts in the worst case alone.</summary>
     public static Source WorstOnly(double worstLow, double worstHigh) =>

@@ -1,0 +1,50 @@
+namespace RebuildPlanner.Core.Stacks;
+
+/// <summary>What trials are run on: doubts in, figures out.</summary>
+public interface ITrialModel
+{
+    /// <summary>The independent doubts.</summary>
+    ReadOnlySpan<Source> Sources { get; }
+
+    /// <summary>What is asked for, in order.</summary>
+    IReadOnlyList<TrialFigure> Figures { get; }
+
+    /// <summary>Limits asked of several figures at once.</summary>
+    IReadOnlyList<IReadOnlyList<FigureLimit>> Joints => [];
+
+    /// <summary>Room of its own for one who computes.</summary>
+    ITrialWorker Worker();
+}
+
+/// <summary>One who computes the figures of a tile of trials.</summary>
+public interface ITrialWorker
+{
+    /// <summary>Computes every figure in every trial of a tile.</summary>
+    /// <param name="tile">The doubts.</param>
+    /// <param name="figures">The figures, coherent unit: one row of <see cref="TrialTile.Trials"/> after another. A figure without meaning is NaN.</param>
+    /// <param name="linear">The linear parts, less the values: rows of the same kind; those of figures without one are left as they are.</param>
+    void Compute(TrialTile tile, Span<double> figures, Span<double> linear);
+}
+
+/// <summary>A figure to be sampled.</summary>
+/// <param name="Value">At the estimates, coherent unit.</param>
+/// <param name="Row">Change for a unit of each source, or null where the linear part is of no use: a spread, a sum of squares.</param>
+public sealed record TrialFigure(double Value, double[]? Row);
+
+/// <summary>Limits on one figure of a model.</summary>
+/// <param name="Figure">Which, by its place.</param>
+/// <param name="Low">The least allowed, or −∞.</param>
+/// <param name="High">The greatest allowed, or +∞.</param>
+public readonly record struct FigureLimit(int Figure, double Low, double High);
+
+/// <summary>How trials are run.</summary>
+/// <param name="Seed">What the draws begin with: the same seed gives the same answer.</param>
+/// <param name="Trials">How many, or null to stop when the digits wanted are sure.</param>
+/// <param name="Digits">Significant digits of u that are wanted sure, 1 or 2.</param>
+/// <param name="Plain">Counts trials alone, without the exact linear part.</param>
+/// <param name="Threads">How many compute at once, or 0 for as many as the machine has; it changes no answer.</param>
+public sealed record TrialOptions(ulong Seed = 1, int? Trials = null, int Digits = 2, bool Plain = false, int Threads = 0)
+{
+    /// <summary>The most trials that are run to make digits sure.</summary>
+    public const int MostTrials = 10_000_000;
+}
