@@ -14,4 +14,7 @@ public static class ExitCode
 
     /// <summary>The store failed; standard error says what happened and what to do.</summary>
     public const int StoreFailed = 3;
+
+    /// <summary>Broken off by Ctrl-C: 128 and the number of its signal, as shells have it.</summary>
+    public const int BrokenOff = 130;
 }

@@ -28,16 +28,25 @@ public static class ResultsCommand
         Option<bool> json = new("--json") { Description = "As JSON: units cm3, mm, kPa and 1, full precision." };
         Option<bool> inch = new("--inch") { Description = "Print in inch, cubic inch and psi." };
         ExampleCommand command = new("results", Description, Example) { stage, json, inch };
+        TrialRun trials = new();
+        trials.AddTo(command);
         source.AddTo(command);
-        command.SetAction(parsed => source.Read(parsed, terminal) is { } read
-            ? Run(terminal, read.Job, read.Name, parsed.GetValue(stage), parsed.GetValue(json), parsed.GetValue(inch) ? UnitSystem.Inch : UnitSystem.Metric)
-            : ExitCode.Wrong);
+        command.SetAction(parsed =>
+        {
+            if (source.Read(parsed, terminal) is not var (job, name))
+            {
+                return ExitCode.Wrong;
+            }
+
+            return trials.Results(job, parsed.GetValue(stage) ?? LastStage.Of(job), parsed, terminal) is { } results
+                ? Show(terminal, job, name, results, parsed.GetValue(json), parsed.GetValue(inch) ? UnitSystem.Inch : UnitSystem.Metric)
+                : ExitCode.BrokenOff;
+        });
         return command;
     }
 
-    private static int Run(Terminal terminal, Job job, string name, Stage? asked, bool asJson, UnitSystem system)
+    private static int Show(Terminal terminal, Job job, string name, Results results, bool asJson, UnitSystem system)
     {
-        Results results = StageResults.Of(job, asked ?? LastStage.Of(job));
         if (JobOptions.IsEmpty(name, results, terminal))
         {
             return ExitCode.Wrong;

@@ -1,3 +1,4 @@
+using System.Globalization;
 using RebuildPlanner.Core.Jobs;
 using RebuildPlanner.Core.Quantities;
 using Spectre.Console;
@@ -12,8 +13,9 @@ internal static class ResultsScreen
     {
         IAnsiConsole console = terminal.Draw();
         ResultsText text = new(results, system);
-        Heading(console, job, results);
+        Heading(console, job, results, text);
         Ratios(console, results, text);
+        Trials(console, results);
         Bores(console, results, text);
         VolumesOf(console, results, text);
         Spreads(console, results, text);
@@ -23,7 +25,7 @@ internal static class ResultsScreen
         CautionsOf(console, text);
     }
 
-    private static void Heading(IAnsiConsole console, Job job, Results results)
+    private static void Heading(IAnsiConsole console, Job job, Results results, ResultsText text)
     {
         Line(console, $"[bold]Job {Escape(results.Job)}[/]  {Escape(job.Title ?? "")}");
         string engine = job.Engine.Description ?? $"{job.Engine.Cylinders} cylinders";
@@ -32,6 +34,10 @@ internal static class ResultsScreen
         console.WriteLine();
         Line(console, "95 %: the true figure lies between these with 95 % belief.");
         Line(console, "worst: between these even with every error at its limit at once.");
+        foreach (string method in text.Method())
+        {
+            Line(console, Escape(method));
+        }
     }
 
     private static void Ratios(IAnsiConsole console, Results results, ResultsText text)
@@ -46,6 +52,29 @@ internal static class ResultsScreen
         }
 
         Write(console, "Compression ratio", table, results.Cylinders.Any(cylinder => cylinder.CompressionRatio is not null));
+    }
+
+    // Eighths of a letter's height, the fullest part of any cylinder eight of them.
+    private static void Trials(IAnsiConsole console, Results results)
+    {
+        const string Eighths = " ▁▂▃▄▅▆▇█";
+        if (results.RatioPicture is not { } picture)
+        {
+            return;
+        }
+
+        double most = picture.Shares.OfType<IReadOnlyList<double>>().Max(shares => shares.Max());
+        Table table = NewTable("cyl", string.Create(CultureInfo.InvariantCulture, $"{picture.From:F2}"), string.Create(CultureInfo.InvariantCulture, $"{picture.To:F2}"));
+        table.Columns[1].LeftAligned();
+        for (int cylinder = 0; cylinder < picture.Shares.Count; cylinder++)
+        {
+            if (picture.Shares[cylinder] is { } shares)
+            {
+                Row(table, results.Cylinders[cylinder].Cylinder, string.Concat(shares.Select(share => Eighths[(int)Math.Ceiling(share / most * (Eighths.Length - 1) - 1e-9)])), "");
+            }
+        }
+
+        Write(console, "Ratio, as the trials fell", table, known: true);
     }
 
     private static void Bores(IAnsiConsole console, Results results, ResultsText text)
@@ -97,7 +126,7 @@ internal static class ResultsScreen
         Add("spread of chambers", results.ChamberSpread);
         table.Columns[0].LeftAligned();
         Write(console, "Engine", table, table.Rows.Count > 0);
-        if (results.RatioSpread is { Low: <= 0.0 })
+        if (results.RatioSpread is not null && !results.RatiosDiffer)
         {
             Line(console, "Between the ratios of the cylinders no difference is proven.");
         }

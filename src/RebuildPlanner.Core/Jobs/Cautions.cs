@@ -10,11 +10,20 @@ public static class Cautions
     // A bound looser than this part of its width would change a printed digit.
     private const double VisibleSlack = 1e-3;
 
+    // More trials than this without clearance, and the ratio's interval says little.
+    private const double MostWithoutClearance = 1e-3;
+
     /// <summary>The cautions of a stage.</summary>
-    public static IReadOnlyList<Caution> Of(StageModel model, StageFigures figures)
+    public static IReadOnlyList<Caution> Of(StageModel model, StageFigures figures, TrialReport? trials = null)
     {
         List<Caution> cautions = [];
         cautions.AddRange(Impossible(model, figures));
+        if (trials is { WithoutClearance: > MostWithoutClearance })
+        {
+            cautions.Add(new Caution(
+                "clearance-in-doubt", "In some trials no clearance was left at top dead centre, so that the ratio has no end: take another reading of what is most in doubt."));
+        }
+
         cautions.AddRange(Ended(model));
         cautions.AddRange(EarlierStage(model));
         cautions.AddRange(TopLand(model));

@@ -1,5 +1,6 @@
 using RebuildPlanner.Core.Measuring;
 using RebuildPlanner.Core.Quantities;
+using RebuildPlanner.Core.Stacks;
 
 namespace RebuildPlanner.Core.Jobs;
 
@@ -125,11 +126,39 @@ public sealed record MissingFigure(string What, string Cylinder);
 public sealed record ProvenanceLine(
     string What, string Cylinder, FigureKind Kind, Stage? Stage, string? From, string? Gauge, ResultQuantity Value, string? Written);
 
+/// <summary>What trials showed of first order, and how they were run.</summary>
+/// <param name="Options">How they were run.</param>
+/// <param name="Trials">How many.</param>
+/// <param name="IsCapped">Whether they ended at the cap with digits unsure.</param>
+/// <param name="FailsAt">The figure first order is furthest off at, beyond the digits wanted; null where it holds.</param>
+/// <param name="FailsOn">The cylinder it is of, or null.</param>
+/// <param name="WithoutClearance">The largest share of trials of a cylinder in which no clearance was left.</param>
+public sealed record TrialReport(TrialOptions Options, long Trials, bool IsCapped, string? FailsAt, string? FailsOn, double WithoutClearance)
+{
+    /// <summary>Whether the intervals and probabilities printed are those of first order, checked by the trials.</summary>
+    public bool FirstOrderHolds => FailsAt is null;
+}
+
+/// <summary>Shares of the trials in equal parts of one range, cylinder by cylinder.</summary>
+/// <param name="From">Where the range begins, 1.</param>
+/// <param name="To">Where it ends.</param>
+/// <param name="Shares">For each cylinder the shares, or null where it has no ratio.</param>
+public sealed record RatioPicture(double From, double To, IReadOnlyList<IReadOnlyList<double>?> Shares);
+
 /// <summary>Everything known of an engine at one stage: what every face prints, computed once.</summary>
 public sealed record Results(string Job, Stage Stage)
 {
     /// <summary>True where nothing of any cylinder could be computed.</summary>
     public bool IsEmpty => Cylinders.All(cylinder => cylinder == new CylinderResult(cylinder.Cylinder) { Shares = cylinder.Shares });
+
+    /// <summary>The trials behind the results, or null where none were run.</summary>
+    public TrialReport? Trials { get; init; }
+
+    /// <summary>How the trials of each cylinder's ratio fell, or null where none were run or no ratio is in doubt.</summary>
+    public RatioPicture? RatioPicture { get; init; }
+
+    /// <summary>Whether first order proves a difference between the cylinders with the largest and the smallest ratio.</summary>
+    public bool RatiosDiffer { get; init; }
 
     /// <summary>Sum of the swept volumes.</summary>
     public ResultQuantity? Displacement { get; init; }

@@ -22,9 +22,10 @@ public static class ResultsJson
             json.WriteNumber("version", Version);
             json.WriteString("job", results.Job);
             json.WriteString("stage", StageWords.Of(results.Stage));
-            json.WriteString("method", "first order");
-            json.WriteNull("seed");
-            json.WriteNull("trials");
+            TrialReport? counted = results.Trials is { FirstOrderHolds: false } report ? report : null;
+            json.WriteString("method", counted is null ? "first order" : "Monte Carlo");
+            Number(json, "seed", counted?.Options.Seed);
+            Number(json, "trials", counted?.Trials);
             Quantity(json, "displacement", results.Displacement);
             Array(json, "cylinders", results.Cylinders, Cylinder);
             json.WriteStartObject("spread");

@@ -33,6 +33,32 @@ public sealed class ResultsText(Results results, UnitSystem system)
         return distinct.Length == results.Cylinders.Count ? All : string.Join(", ", distinct);
     }
 
+    /// <summary>Which reading of the model the intervals and beliefs are of, and how sure that is; nothing where no figure is in doubt.</summary>
+    public IEnumerable<string> Method()
+    {
+        if (results.Trials is not { } trials)
+        {
+            yield break;
+        }
+
+        string digits = trials.Options.Digits == 1 ? "one digit" : "two digits";
+        string run = string.Create(CultureInfo.InvariantCulture, $"{Thousands(trials.Trials)} trials, seed {trials.Options.Seed}{(trials.Options.Plain ? ", counted plainly" : "")}");
+        yield return trials.FirstOrderHolds
+            ? $"Intervals and beliefs are of first order; trials agree to {digits} of the uncertainty ({run})."
+            : $"Intervals and beliefs are by trials, Monte Carlo ({run}); first order is off by more than {digits} allow, most at the {trials.FailsAt}{(trials.FailsOn is { } cylinder ? $" of cylinder {cylinder}" : "")}.";
+        if (!trials.FirstOrderHolds && results.RatioSpread is not null)
+        {
+            yield return "A spread by trials is biased upwards: measuring noise spreads even cylinders that are alike.";
+        }
+
+        if (trials.IsCapped)
+        {
+            yield return $"The trials ended before {digits} were sure.";
+        }
+    }
+
+    private static string Thousands(long number) => number.ToString("#,0", CultureInfo.InvariantCulture).Replace(',', ' ');
+
     /// <summary>What is missing, a line a figure.</summary>
     public IEnumerable<string> Missing() =>
         results.Missing.GroupBy(missing => missing.What).Select(same => $"{same.Key}: {Cylinders(same.Select(missing => missing.Cylinder))}");

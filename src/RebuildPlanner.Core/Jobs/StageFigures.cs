@@ -11,6 +11,7 @@ public sealed class StageFigures
 {
     private readonly StageModel _model;
     private readonly WorstCase _worst;
+    private EngineTrials? _trials;
 
     /// <summary>Reads a model both ways.</summary>
     public StageFigures(StageModel model)
@@ -22,6 +23,19 @@ public sealed class StageFigures
 
     /// <summary>The first-order reading.</summary>
     public FirstOrder FirstOrder { get; }
+
+    /// <summary>The trials that were run, or null.</summary>
+    public MonteCarlo? Run { get; private set; }
+
+    /// <summary>Whether intervals and probabilities are those of the trials, not of first order. Values and standard uncertainties are first order always.</summary>
+    public bool TrialsCount { get; private set; }
+
+    /// <summary>Takes trials in, to count in the place of first order or to stand behind it.</summary>
+    public void Take(EngineTrials trials, MonteCarlo run, bool count) => (_trials, Run, TrialsCount) = (trials, run, count);
+
+    /// <summary>Whether first order proves the spread of an output to be one: the extreme pair differs by more than its half-width.</summary>
+    /// <remarks>Trials cannot tell: the largest of equal cylinders less the smallest is above zero in every one of them.</remarks>
+    public bool Differs(Output output) => Spread(output) is { } spread && FirstOrderLimits(spread.Value, [.. spread.Row]).Low > 0.0;
 
     /// <summary>Sum of the swept volumes, or null where one is missing, mm³.</summary>
     public LinearFigure? Displacement
@@ -35,7 +49,7 @@ public sealed class StageFigures
             }
 
             Term[] terms = [.. swept.SelectMany(figure => figure!.Terms)];
-            return new LinearFigure(swept.Sum(figure => figure!.Value), Row(terms), _worst.Sum(Output.SweptVolume), terms);
+            return new LinearFigure(swept.Sum(figure => figure!.Value), Row(terms), _worst.Sum(Output.SweptVolume), terms) { Sampled = Sampled(_trials?.Displacement) };
         }
     }
 
@@ -71,8 +85,13 @@ public sealed class StageFigures
         }
 
         return new LinearFigure(
-            FirstOrder.Value(cylinder, output), FirstOrder.Row(cylinder, output), _worst.Limits(cylinder, output), terms);
+            FirstOrder.Value(cylinder, output), FirstOrder.Row(cylinder, output), _worst.Limits(cylinder, output), terms)
+        {
+            Sampled = Sampled(_trials?.PlaceOf(output, cylinder)),
+        };
     }
+
+    private SampledFigure? Sampled(int? place) => place is { } at ? Run?.Figures[at] : null;
 
     /// <summary>A figure that is linear in what was measured, as it stands or combined.</summary>
     public LinearFigure Linear(params ReadOnlySpan<(double Factor, Estimate Estimate)> parts)
@@ -90,7 +109,7 @@ public sealed class StageFigures
     public LinearFigure? Spread(Output output)
     {
         LinearFigure?[] known = [.. Cylinders.Select(cylinder => Of(output, cylinder))];
-        return Array.Exists(known, figure => figure is null) ? null : Spread(output, known);
+        return Array.Exists(known, figure => figure is null) || Spread(output, known) is not { } spread ? null : spread with { Sampled = Sampled(_trials?.SpreadOf(output)) };
     }
 
     /// <summary>The spread of those cylinders whose output is known already, as it is told while the others are still being read; null for fewer than two.</summary>
@@ -134,11 +153,18 @@ public sealed class StageFigures
     public ResultQuantity Quantity(LinearFigure figure, QuantityKind kind, bool neverNegative = false)
     {
         double[] row = [.. figure.Row];
-        double halfWidth = new LinearSum(_model.Model.Sources, row).HalfWidth(StageResults.Coverage);
+        (double low, double high) = TrialsCount && figure.Sampled is { } sampled ? sampled.Symmetric(StageResults.Coverage)
+            : figure.Sampled?.FirstOrder ?? FirstOrderLimits(figure.Value, row);
         double least = neverNegative ? 0.0 : double.NegativeInfinity;
         return new ResultQuantity(
-            figure.Value, kind, Propagation.StandardUncertainty(_model.Model.Sources, row), Math.Max(least, figure.Value - halfWidth),
-            figure.Value + halfWidth, Math.Max(least, figure.Worst.Low), figure.Worst.High);
+            figure.Value, kind, Propagation.StandardUncertainty(_model.Model.Sources, row), Math.Max(least, low), high,
+            Math.Max(least, figure.Worst.Low), figure.Worst.High);
+    }
+
+    private (double Low, double High) FirstOrderLimits(double value, double[] row)
+    {
+        double halfWidth = new LinearSum(_model.Model.Sources, row).HalfWidth(StageResults.Coverage);
+        return (value - halfWidth, value + halfWidth);
     }
 
     /// <summary>Value and doubt of a figure that went into the results.</summary>

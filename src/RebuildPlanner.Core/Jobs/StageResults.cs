@@ -14,20 +14,28 @@ public static class StageResults
     /// <summary>Computes the results.</summary>
     /// <param name="job">The job.</param>
     /// <param name="stage">The stage asked for.</param>
+    /// <param name="options">How first order is checked by trials, or null for the usual way; no trials at all where their number is 0.</param>
+    /// <param name="progress">Told the trials run so far.</param>
+    /// <param name="cancellation">Ends the trials between two blocks.</param>
     /// <returns>The results; <see cref="Results.Cylinders"/> hold nothing but nulls where no cylinder can be computed.</returns>
-    public static Results Of(Job job, Stage stage)
+    /// <exception cref="OperationCanceledException">The trials were ended.</exception>
+    public static Results Of(Job job, Stage stage, TrialOptions? options = null, IProgress<long>? progress = null, CancellationToken cancellation = default)
     {
         StageModel model = new(job, stage);
         StageFigures figures = new(model);
-        IReadOnlyList<Verdict> verdicts = new Verdicts(model, figures).All();
+        Verdicts verdicts = new(model, figures);
+        (TrialReport? report, RatioPicture? picture) = FirstOrderCheck.Run(model, figures, verdicts, options ?? new TrialOptions(), progress, cancellation);
         return new Results(job.Number, stage)
         {
+            Trials = report,
+            RatioPicture = picture,
+            RatiosDiffer = figures.Differs(Output.CompressionRatio),
             Displacement = figures.Displacement is { } displacement ? figures.Quantity(displacement, QuantityKind.Volume) : null,
             Cylinders = [.. Enumerable.Range(0, job.Engine.Cylinders).Select(cylinder => CylinderOf(model, figures, cylinder))],
             RatioSpread = SpreadOf(figures, Output.CompressionRatio, QuantityKind.Ratio),
             ChamberSpread = SpreadOf(figures, Output.Chamber, QuantityKind.Volume),
-            Verdicts = verdicts,
-            Cautions = Cautions.Of(model, figures),
+            Verdicts = verdicts.All(),
+            Cautions = Cautions.Of(model, figures, report),
             Missing = model.Missing,
             Provenance = [.. model.Used.Select(used => new ProvenanceLine(
                 WhatWords.Of(used.Figure.What), model.Search.Parts.Label(used.Cylinder), used.Figure.Kind, used.Figure.Stage, used.Figure.From,

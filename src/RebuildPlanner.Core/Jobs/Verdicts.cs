@@ -9,6 +9,27 @@ namespace RebuildPlanner.Core.Jobs;
 /// <remarks>Source: jcgm106 (8.3.1). A figure without limits is never enough for proof, though its probability is still printed.</remarks>
 public sealed class Verdicts(StageModel model, StageFigures figures)
 {
+    private readonly Dictionary<int, int> _jointOf = [];
+
+    /// <summary>Asks trials for what only they can tell: limits on a ratio or pressure held by several cylinders at once.</summary>
+    public void AskJointly(EngineTrials trials)
+    {
+        foreach ((Limit limit, int number) in model.Job.Limits.Select((limit, number) => (limit, number)).Where(asked => IsJudged(asked.limit)))
+        {
+            Output? output = limit.Subject.Derived switch
+            {
+                Derived.CompressionRatio => Output.CompressionRatio,
+                Derived.TrappedRatio => Output.TrappedRatio,
+                Derived.CrankingPressure => Output.CrankingPressure,
+                _ => null,
+            };
+            if (output is { } bent && limit.Place.Cylinder is null && trials.AddJoint(bent, [.. Covered(limit)], Least(limit), Most(limit)) is { } joint)
+            {
+                _jointOf.Add(number, joint);
+            }
+        }
+    }
+
     /// <summary>The verdicts on every limit that is judged at the stage, in the order of the limits.</summary>
     public IReadOnlyList<Verdict> All() => [.. model.Job.Limits.SelectMany((limit, number) => IsJudged(limit) ? Of(limit, number) : [])];
 
@@ -46,7 +67,7 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
             return [new Line(null, figures.Spread(output), FirstMissing(limit.Subject, null))];
         }
 
-        IEnumerable<int> cylinders = Enumerable.Range(0, model.Job.Engine.Cylinders).Where(cylinder => model.Search.Parts.Covers(limit.Place, cylinder));
+        IEnumerable<int> cylinders = Covered(limit);
         Belongs belongs = limit.Subject.What is { } what ? WhatTable.Line(what).Belongs : Belongs.Cylinder;
         return belongs switch
         {
@@ -133,7 +154,9 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
         }
 
         LinearFigure[] judged = [.. lines.Select(line => line.Figure!)];
-        double probability = Probability(limit, [.. judged.Select(figure => figure.Row.ToArray())], judged);
+        double probability = cylinder is null && judged.Length > 1 && figures is { TrialsCount: true, Run: { } run } && _jointOf.TryGetValue(number, out int joint) ? run.Joint(joint)
+            : figures.TrialsCount && judged is [{ Sampled: { } sampled }] ? sampled.Inside(Least(limit), Most(limit))
+            : Probability(limit, [.. judged.Select(figure => figure.Row.ToArray())], judged);
         string? unstated = Unstated(judged);
         VerdictState state = Decide(probability, level);
         if (state == VerdictState.Within && unstated is not null)
@@ -148,14 +171,20 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
     private static VerdictState Decide(double probability, double level) =>
         probability >= level ? VerdictState.Within : probability <= 1.0 - level ? VerdictState.Outside : VerdictState.NotProven;
 
+    private IEnumerable<int> Covered(Limit limit) =>
+        Enumerable.Range(0, model.Job.Engine.Cylinders).Where(cylinder => model.Search.Parts.Covers(limit.Place, cylinder));
+
+    private static double Least(Limit limit) => limit.Min?.Midpoint ?? double.NegativeInfinity;
+
+    private static double Most(Limit limit) => limit.Max?.Midpoint ?? double.PositiveInfinity;
+
     private double Probability(Limit limit, double[][] rows, LinearFigure[] judged)
     {
         LimitedLine[] lines =
         [
             .. judged.Select((figure, index) => new LimitedLine(
                 rows[index],
-                (limit.Min?.Midpoint ?? double.NegativeInfinity) - figure.Value,
-                (limit.Max?.Midpoint ?? double.PositiveInfinity) - figure.Value)),
+                Least(limit) - figure.Value, Most(limit) - figure.Value)),
         ];
         return JointProbability.Of(model.Model.Sources, lines);
     }

@@ -32,6 +32,12 @@ public struct RandomLanes
         (_c, _d) = (Vector512.Create<ulong>(words[(2 * lanes)..]), Vector512.Create<ulong>(words[(3 * lanes)..]));
     }
 
+    private RandomLanes(Vector512<ulong> a, Vector512<ulong> b, Vector512<ulong> c, Vector512<ulong> d) => (_a, _b, _c, _d) = (a, b, c, d);
+
+    /// <summary>Streams that all begin with one state, to be compared with the generator's definition.</summary>
+    internal static RandomLanes FromState(ulong a, ulong b, ulong c, ulong d) =>
+        new(Vector512.Create(a), Vector512.Create(b), Vector512.Create(c), Vector512.Create(d));
+
     /// <summary>The next 64 bits of each stream.</summary>
     [Inline(AggressiveInlining)]
     public Vector512<ulong> NextBits()

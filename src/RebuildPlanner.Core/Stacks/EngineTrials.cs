@@ -8,15 +8,20 @@ namespace RebuildPlanner.Core.Stacks;
 
 /// <summary>An engine as trials see it: every figure that bends, of every cylinder, and what the cylinders come to together.</summary>
 /// <remarks>
-/// Figures that are sums of what was measured (bore, chamber, crown, piston to head) have an exact law already and are not drawn.
+/// Figures that are sums of what was measured (bore, chamber, crown, piston to head) have an exact law already and are not drawn. The static ratios and
+/// the displacement decide when there are trials enough.
 /// </remarks>
 public sealed class EngineTrials : ITrialModel
 {
-    private static readonly Output[] _bent =
+    /// <summary>The figures of a cylinder that are no plain sum of what was measured, with their words.</summary>
+    public static IReadOnlyList<(Output Output, string Word)> Bent { get; } =
     [
-        Output.SweptVolume, Output.Gasket, Output.Deck, Output.TopLand, Output.ClearanceVolume, Output.CompressionRatio, Output.TrappedRatio,
-        Output.CrankingPressure, Output.CrossCheck,
+        (Output.SweptVolume, "swept volume"), (Output.Gasket, "gasket volume"), (Output.Deck, "deck volume"), (Output.TopLand, "top-land crevice"),
+        (Output.ClearanceVolume, "clearance volume"), (Output.CompressionRatio, "compression ratio"), (Output.TrappedRatio, "trapped ratio"),
+        (Output.CrankingPressure, "cranking pressure"), (Output.CrossCheck, "cross-check"),
     ];
+
+    private static readonly Output[] _bent = [.. Bent.Select(bent => bent.Output)];
 
     private readonly EngineModel _model;
     private readonly FirstOrder _firstOrder;
@@ -42,7 +47,7 @@ public sealed class EngineTrials : ITrialModel
                 if (IsKnown(output, cylinder))
                 {
                     _placeOf[(cylinder * CylinderStack<Lanes>.Count) + (int)output] = _figures.Count;
-                    _figures.Add(new TrialFigure(firstOrder.Value(cylinder, output), firstOrder.Row(cylinder, output)));
+                    _figures.Add(new TrialFigure(firstOrder.Value(cylinder, output), firstOrder.Row(cylinder, output), output == Output.CompressionRatio, PoleOf(output)));
                 }
             }
         }
@@ -67,7 +72,7 @@ public sealed class EngineTrials : ITrialModel
             if (IsKnownOfAll(output))
             {
                 double[] values = [.. Enumerable.Range(0, cylinders).Select(cylinder => firstOrder.Value(cylinder, output))];
-                _spreadOf.Add(output, Add(new TrialFigure(values.Max() - values.Min(), null)));
+                _spreadOf.Add(output, Add(new TrialFigure(values.Max() - values.Min(), null, Decides: false)));
             }
         }
     }
@@ -106,6 +111,9 @@ public sealed class EngineTrials : ITrialModel
 
     /// <inheritdoc/>
     public ITrialWorker Worker() => new CylinderBench(this);
+
+    // Both ratios are 1 and a quotient with the clearance volume below the line; that volume is nearly a plain sum.
+    private static double? PoleOf(Output output) => output is Output.CompressionRatio or Output.TrappedRatio ? 1.0 : null;
 
     private int Add(TrialFigure figure)
     {

@@ -41,8 +41,10 @@ internal sealed class FigureTally
     /// <summary>Counts of the figure: below the bins, each bin, above.</summary>
     public int[] Figure { get; } = new int[Bins + 2];
 
-    /// <summary>Counts of value + linear part.</summary>
+    /// <summary>Counts of the linear part, bent.</summary>
     public int[] Linear { get; } = new int[Bins + 2];
+
+    private readonly int[] _figureBefore = new int[Bins + 3], _linearBefore = new int[Bins + 3];
 
     /// <summary>Width of a bin.</summary>
     public double BinWidth => 1.0 / _perUnit;
@@ -78,18 +80,28 @@ internal sealed class FigureTally
         Array.Clear(other.Linear);
     }
 
-    /// <summary>How many counts lie at or below a place, the bin that holds it taken as even.</summary>
-    public double Below(int[] counts, double y)
+    /// <summary>Adds the counts up from below, so that they can be asked for.</summary>
+    public void AddUp()
+    {
+        for (int bin = 0; bin < Bins + 2; bin++)
+        {
+            _figureBefore[bin + 1] = _figureBefore[bin] + Figure[bin];
+            _linearBefore[bin + 1] = _linearBefore[bin] + Linear[bin];
+        }
+    }
+
+    /// <summary>How many trials of the figure lie at or below a place, the bin that holds it taken as even.</summary>
+    public double FigureBelow(double y) => Below(Figure, _figureBefore, y);
+
+    /// <summary>How many of the bent linear part do.</summary>
+    public double LinearBelow(double y) => Below(Linear, _linearBefore, y);
+
+    private double Below(int[] counts, int[] before, double y)
     {
         double place = Math.Clamp(((y - _from) * _perUnit) + 1.0, 0.0, Bins + 2.0);
         int bin = Math.Min((int)place, Bins + 1);
-        double below = 0.0;
-        for (int i = 0; i < bin; i++)
-        {
-            below += counts[i];
-        }
 
         // An open end has no width to share out: nothing of it counts before it, all of it after.
-        return bin is 0 or Bins + 1 ? below : below + ((place - bin) * counts[bin]);
+        return bin is 0 or Bins + 1 ? before[bin] : before[bin] + ((place - bin) * counts[bin]);
     }
 }

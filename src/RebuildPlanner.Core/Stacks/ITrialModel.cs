@@ -29,7 +29,31 @@ public interface ITrialWorker
 /// <summary>A figure to be sampled.</summary>
 /// <param name="Value">At the estimates, coherent unit.</param>
 /// <param name="Row">Change for a unit of each source, or null where the linear part is of no use: a spread, a sum of squares.</param>
-public sealed record TrialFigure(double Value, double[]? Row);
+/// <param name="Decides">Whether trials go on until its digits are sure; the others are as sure as they are by then.</param>
+/// <param name="Pole">
+/// Where the figure bends as one over a nearly linear sum: what stands still while the rest is turned over, as the 1 in 1 + V_s/V_c; else null.
+/// </param>
+public sealed record TrialFigure(double Value, double[]? Row, bool Decides = true, double? Pole = null)
+{
+    /// <summary>The figure bent as it bends: its linear part carried to where the reciprocal takes it.</summary>
+    /// <param name="linear">The linear part, less the value.</param>
+    /// <remarks>p + (v − p)/(1 − l/(v − p)), whose slope at l = 0 is 1; without bound from l = v − p on. Without a pole v + l.</remarks>
+    public double Bent(double linear)
+    {
+        if (Pole is not { } pole)
+        {
+            return Value + linear;
+        }
+
+        double above = Value - pole, turned = 1.0 - (linear / above);
+        return turned > 0.0 ? pole + (above / turned) : double.PositiveInfinity;
+    }
+
+    /// <summary>The linear part that is bent to a figure; −∞ at the pole and below.</summary>
+    public double Unbent(double figure) => Pole is not { } pole ? figure - Value
+        : figure <= pole ? double.NegativeInfinity
+        : (Value - pole) * (1.0 - ((Value - pole) / (figure - pole)));
+}
 
 /// <summary>Limits on one figure of a model.</summary>
 /// <param name="Figure">Which, by its place.</param>

@@ -9,6 +9,9 @@ namespace RebuildPlanner.Core.Stacks;
 /// <param name="Terms">The same changes with what they count under.</param>
 public sealed record LinearFigure(double Value, IReadOnlyList<double> Row, WorstLimits Worst, IReadOnlyList<Term> Terms)
 {
+    /// <summary>The figure as trials show it, or null where none were run on it.</summary>
+    public SampledFigure? Sampled { get; init; }
+
     /// <summary>The row without what counts under one thing: that thing known exactly.</summary>
     public double[] RowWithout(What what)
     {

@@ -54,16 +54,16 @@ public sealed class MonteCarlo
         double[][] pilot = RunPilot(model, options.Seed);
         PreparedFigure[] prepared = [.. model.Figures.Select((figure, number) => PreparedFigure.Of(model.Sources, figure, pilot[number], options.Plain))];
         MonteCarlo run = new([.. prepared.Select(figure => figure.Begin())], new long[model.Joints.Count], options);
-        int tiles = options.Plain || Array.TrueForAll(prepared, figure => figure.Linear is null) ? PlainTiles : ControlledTiles;
+        int tiles = !Array.Exists(prepared, figure => figure.Controls) ? PlainTiles : ControlledTiles;
         int trialsOfBlock = tiles * TrialTile.Trials;
         int most = Math.Max(FewestBlocks, (int)Math.Ceiling((double)(options.Trials ?? TrialOptions.MostTrials) / trialsOfBlock));
         int threads = options.Threads > 0 ? options.Threads : Environment.ProcessorCount;
         TrialBench[] benches = [.. Enumerable.Range(0, Math.Min(threads, FewestBlocks)).Select(_ => new TrialBench(model, prepared))];
+        TrialWave wave = new(model, Math.Min(most, MostBlocksAtOnce), tiles, options.Seed);
         for (int done = 0; done < most;)
         {
             int next = Math.Min(most, Math.Min(done + MostBlocksAtOnce, Math.Max(FewestBlocks, done + (done / 4))));
-            TrialWave wave = new(model, done, next, tiles, options.Seed);
-            wave.Run(benches, cancellation);
+            wave.Run(done, next, benches, cancellation);
             run.Take(wave, trialsOfBlock);
             Gather(prepared, benches);
             done = next;
@@ -88,6 +88,8 @@ public sealed class MonteCarlo
             {
                 prepared[figure].Tally.TakeFrom(bench.Tallies[figure]);
             }
+
+            prepared[figure].Tally.AddUp();
         }
     }
 
@@ -113,9 +115,9 @@ public sealed class MonteCarlo
     {
         for (int figure = 0; figure < _figures.Length; figure++)
         {
-            if (model.Figures[figure].Row is null && !Options.Plain)
+            if (!model.Figures[figure].Decides)
             {
-                continue; // a spread is counted plainly for as long as the rest takes
+                continue;
             }
 
             double u = model.Figures[figure].Row is { } known ? Propagation.StandardUncertainty(model.Sources, known) : _figures[figure].StandardUncertainty;

@@ -1,26 +1,39 @@
 namespace RebuildPlanner.Core.Stacks;
 
 /// <summary>What is settled of a figure before its trials are counted.</summary>
-internal sealed record PreparedFigure(TrialFigure Figure, FigureTally Tally, LinearSum? Linear, double LinearVariance, double LowCheck, double HighCheck)
+internal sealed record PreparedFigure(TrialFigure Figure, FigureTally Tally, LinearSum? Linear, bool Controls, double HalfWidth, double LowCheck, double HighCheck)
 {
     public static PreparedFigure Of(ReadOnlySpan<Source> sources, TrialFigure figure, double[] pilot, bool plain)
     {
-        double[] sorted = [.. pilot.Where(double.IsFinite).Order()];
+        double[] sorted = Array.FindAll(pilot, double.IsFinite);
+        Array.Sort(sorted);
         double low = sorted.Length == 0 ? figure.Value : sorted[(int)(0.025 * (sorted.Length - 1))];
         double high = sorted.Length == 0 ? figure.Value : sorted[(int)Math.Ceiling(0.975 * (sorted.Length - 1))];
-        LinearSum? linear = !plain && figure.Row is { } row && LinearSum.Takes(sources, row) ? new LinearSum(sources, row) : null;
+        LinearSum? linear = figure.Row is { } row && LinearSum.Takes(sources, row) ? new LinearSum(sources, row) : null;
         if (linear is { StandardUncertainty: > 0.0 })
         {
             double half = linear.HalfWidth(MonteCarlo.Coverage);
-            (double lowCheck, double highCheck) = (figure.Value - half, figure.Value + half);
-            return new(figure, Between(Math.Min(low, lowCheck), Math.Max(high, highCheck)), linear, Propagation.VarianceOfLaws(sources, figure.Row!), lowCheck, highCheck);
+            (double lowCheck, double highCheck) = (figure.Bent(-half), figure.Bent(half));
+            if (double.IsFinite(highCheck))
+            {
+                return new(figure, Between(Math.Min(low, lowCheck), Math.Max(high, highCheck)), linear, !plain, half, lowCheck, highCheck)
+                {
+                    Variance = Propagation.VarianceOfLaws(sources, figure.Row!),
+                    LeastFreedom = Propagation.LeastFreedom(sources, figure.Row!),
+                };
+            }
         }
 
-        double variance = figure.Row is { } known ? Propagation.VarianceOfLaws(sources, known) : 0.0;
-        return new(figure, Between(low, high), null, variance, low, high);
+        return new(figure, Between(low, high), null, false, 0.0, low, high);
     }
 
-    public SampledFigure Begin() => new(Figure, Tally, Linear, LinearVariance, LowCheck, HighCheck);
+    /// <summary>The variance of the linear part, without bound where a pool has two degrees of freedom or fewer.</summary>
+    public double Variance { get; private init; }
+
+    /// <summary>The fewest degrees of freedom of a part.</summary>
+    public double LeastFreedom { get; private init; } = double.PositiveInfinity;
+
+    public SampledFigure Begin() => new(this);
 
     // One and a half widths more to either side: a normal's bins are then a sixtieth of its standard deviation.
     private static FigureTally Between(double low, double high)

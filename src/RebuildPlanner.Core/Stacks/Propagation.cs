@@ -74,6 +74,18 @@ public static class Propagation
         return variance;
     }
 
+    /// <summary>The fewest degrees of freedom of a doubt that moves a figure, ∞ where all are known for certain.</summary>
+    public static double LeastFreedom(ReadOnlySpan<Source> sources, ReadOnlySpan<double> row)
+    {
+        double least = double.PositiveInfinity;
+        for (int s = 0; s < sources.Length; s++)
+        {
+            least = sources[s].IsDrawn && row[s] != 0.0 ? Math.Min(least, sources[s].DegreesOfFreedom) : least;
+        }
+
+        return least;
+    }
+
     /// <summary>Adds an estimate's doubts, times a factor, to a row in the figure's unit per unit of each source.</summary>
     /// <param name="row">The row that is added to.</param>
     /// <param name="estimate">The estimate whose terms are added.</param>

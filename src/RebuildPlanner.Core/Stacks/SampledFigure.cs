@@ -2,8 +2,8 @@ namespace RebuildPlanner.Core.Stacks;
 
 /// <summary>One figure as the trials show it: mean, spread, limits, probabilities.</summary>
 /// <remarks>
-/// Where the figure is nearly its linear part, the part's own law is known exactly and only the difference is counted: P(Y ≤ y) = P(L ≤ y) +
-/// [share of Y ≤ y − share of L ≤ y], a control variate. Source: jcgm101 (7.5 to 7.7), glasserman2003 (4.1). Valid for: ten blocks or more.
+/// Where the figure is nearly its linear part, bent as a ratio bends, that part's law is known exactly and only the difference is counted:
+/// P(Y ≤ y) = P(L ≤ y) + [share of Y ≤ y − share of L ≤ y], a control variate. Source: jcgm101 (7.5 to 7.7), glasserman2003 (4.1). Valid for: ten blocks or more.
 /// Error: told beside each limit, from the blocks.
 /// </remarks>
 public sealed class SampledFigure
@@ -11,12 +11,21 @@ public sealed class SampledFigure
     private readonly TrialFigure _figure;
     private readonly FigureTally _tally;
     private readonly LinearSum? _linear;
-    private readonly double _linearVariance, _lowCheck, _highCheck;
+    private readonly bool _controls;
+    private readonly double _linearVariance, _halfWidth, _leastFreedom, _lowCheck, _highCheck;
     private BlockSpread _mean, _difference, _spread, _controlledSpread, _low, _lowDifference, _high, _highDifference;
     private long _without;
+    private (double, double)? _usual;
 
-    internal SampledFigure(TrialFigure figure, FigureTally tally, LinearSum? linear, double linearVariance, double lowCheck, double highCheck) =>
-        (_figure, _tally, _linear, _linearVariance, _lowCheck, _highCheck) = (figure, tally, linear, linearVariance, lowCheck, highCheck);
+    internal SampledFigure(PreparedFigure prepared)
+    {
+        (_figure, _tally, _linear, _controls) = (prepared.Figure, prepared.Tally, prepared.Linear, prepared.Controls);
+        (_linearVariance, _halfWidth, _leastFreedom) = (prepared.Variance, prepared.HalfWidth, prepared.LeastFreedom);
+        (_lowCheck, _highCheck) = (prepared.LowCheck, prepared.HighCheck);
+    }
+
+    /// <summary>The limits of the linear part alone, the interval first order gives; null where there is none.</summary>
+    public (double Low, double High)? FirstOrder => _linear is null ? null : (_figure.Value - _halfWidth, _figure.Value + _halfWidth);
 
     /// <summary>How many trials there were.</summary>
     public long Trials { get; private set; }
@@ -26,7 +35,7 @@ public sealed class SampledFigure
 
     /// <summary>Whether the exact linear part was used: the blocks say that it helps.</summary>
     public bool IsControlled =>
-        _linear is not null && _without == 0 && _lowDifference.ErrorOfMean <= _low.ErrorOfMean && _highDifference.ErrorOfMean <= _high.ErrorOfMean;
+        _controls && _without == 0 && _lowDifference.ErrorOfMean <= _low.ErrorOfMean && _highDifference.ErrorOfMean <= _high.ErrorOfMean;
 
     /// <summary>The mean, coherent unit.</summary>
     public double Mean => _figure.Value + (IsControlled ? _difference.Mean : _mean.Mean);
@@ -36,8 +45,15 @@ public sealed class SampledFigure
         : IsControlled ? _controlledSpread.Mean : _spread.Mean;
 
     /// <summary>The limits of the interval that holds the figure with a probability, as much left out below as above.</summary>
-    public (double Low, double High) Symmetric(double coverage = MonteCarlo.Coverage) =>
-        (At(0.5 * (1.0 - coverage)), At(0.5 * (1.0 + coverage)));
+    public (double Low, double High) Symmetric(double coverage = MonteCarlo.Coverage)
+    {
+        if (coverage != MonteCarlo.Coverage)
+        {
+            return (At(0.5 * (1.0 - coverage)), At(0.5 * (1.0 + coverage)));
+        }
+
+        return _usual ??= (At(0.5 * (1.0 - coverage)), At(0.5 * (1.0 + coverage)));
+    }
 
     /// <summary>The limits of the narrowest interval that holds the figure with a probability.</summary>
     /// <remarks>Source: jcgm101 (5.3.4, 7.7.2). Valid for: one summit. Error: that of counting, greatest where the density is level.</remarks>
@@ -61,8 +77,8 @@ public sealed class SampledFigure
     /// <summary>The probability that the figure is at or below a number.</summary>
     public double Below(double y)
     {
-        double share = _tally.Below(_tally.Figure, y) / Trials;
-        double below = IsControlled ? _linear!.Below(y - _figure.Value) + share - (_tally.Below(_tally.Linear, y) / Trials) : share;
+        double share = _tally.FigureBelow(y) / Trials;
+        double below = IsControlled ? _linear!.Below(_figure.Unbent(y)) + share - (_tally.LinearBelow(y) / Trials) : share;
         return Math.Clamp(below, 0.0, 1.0);
     }
 
@@ -76,7 +92,7 @@ public sealed class SampledFigure
     /// <summary>Shares of the trials in equal parts between two numbers, for a picture.</summary>
     public double[] Shares(double from, double to, int parts)
     {
-        double[] below = [.. Enumerable.Range(0, parts + 1).Select(part => _tally.Below(_tally.Figure, from + ((to - from) * part / parts)) / Trials)];
+        double[] below = [.. Enumerable.Range(0, parts + 1).Select(part => _tally.FigureBelow(from + ((to - from) * part / parts)) / Trials)];
         return [.. below.Skip(1).Zip(below, (after, before) => after - before)];
     }
 
@@ -86,10 +102,14 @@ public sealed class SampledFigure
         bool controlled = IsControlled;
         double mean = controlled ? _difference.ErrorOfMean : _mean.ErrorOfMean;
         double spread = controlled ? _controlledSpread.ErrorOfMean : _spread.ErrorOfMean;
-        double low = (controlled ? _lowDifference : _low).ErrorOfMean / Density(_lowCheck);
-        double high = (controlled ? _highDifference : _high).ErrorOfMean / Density(_highCheck);
-        bool endless = double.IsPositiveInfinity(_linearVariance);
-        return (endless ? 0.0 : 2.0 * mean, endless ? 0.0 : 2.0 * spread, 2.0 * low, 2.0 * high);
+
+        // Where no trial fell between figure and control there is still one that might have.
+        double least = 1.0 / Trials;
+        double low = Math.Max(least, (controlled ? _lowDifference : _low).ErrorOfMean) / Density(_lowCheck);
+        double high = Math.Max(least, (controlled ? _highDifference : _high).ErrorOfMean) / Density(_highCheck);
+
+        // A mean has a standard deviation only above two degrees of freedom, a standard deviation one of its own only above four.
+        return (_leastFreedom > 2.0 ? 2.0 * mean : 0.0, _leastFreedom > 4.0 ? 2.0 * spread : 0.0, 2.0 * low, 2.0 * high);
     }
 
     /// <summary>Takes a block of trials in.</summary>
@@ -114,8 +134,8 @@ public sealed class SampledFigure
         // A few bins to either side: wide enough to hold counts, narrow enough to be level.
         double reach = 8.0 * _tally.BinWidth;
         double density = _linear is not null
-            ? (_linear.Below(y + reach - _figure.Value) - _linear.Below(y - reach - _figure.Value)) / (2.0 * reach)
-            : (_tally.Below(_tally.Figure, y + reach) - _tally.Below(_tally.Figure, y - reach)) / (2.0 * reach * Trials);
+            ? (_linear.Below(_figure.Unbent(y + reach)) - _linear.Below(_figure.Unbent(y - reach))) / (2.0 * reach)
+            : (_tally.FigureBelow(y + reach) - _tally.FigureBelow(y - reach)) / (2.0 * reach * Trials);
         return density > 0.0 ? density : 1.0 / Trials / reach;
     }
 

@@ -34,7 +34,8 @@ internal sealed class TrialBench(ITrialModel model, PreparedFigure[] prepared)
         Vector512<double> middle = Vector512.Create(value), low = Vector512.Create(prepared.LowCheck), high = Vector512.Create(prepared.HighCheck);
         Vector512<double> sum = default, squares = default, difference = default, differences = default;
         Vector512<long> belowLow = default, belowHigh = default, linearLow = default, linearHigh = default, without = default;
-        bool controlled = prepared.Linear is not null;
+        bool controlled = prepared.Controls, bends = prepared.Figure.Pole is not null;
+        Vector512<double> pole = Vector512.Create(prepared.Figure.Pole ?? 0.0), above = middle - pole;
         for (int at = 0; at < figure.Length; at += Vector512<double>.Count)
         {
             Vector512<double> y = Vector512.Create<double>(figure[at..]), none = ~Vector512.Equals(y, y);
@@ -56,8 +57,17 @@ internal sealed class TrialBench(ITrialModel model, PreparedFigure[] prepared)
                 Vector512<double> l = Vector512.Create<double>(linear[at..]);
                 difference += step - l;
                 differences += (step * step) - (l * l);
-                linearLow -= Vector512.LessThanOrEqual(l + middle, low).AsInt64();
-                linearHigh -= Vector512.LessThanOrEqual(l + middle, high).AsInt64();
+                Vector512<double> bent = l;
+                if (bends)
+                {
+                    // As TrialFigure.Bent, and left in its place to be tallied.
+                    Vector512<double> turned = Vector512<double>.One - (l / above), reached = pole + (above / turned);
+                    bent = Vector512.ConditionalSelect(Vector512.GreaterThan(turned, Vector512<double>.Zero), reached, Vector512.Create(double.PositiveInfinity)) - middle;
+                    bent.CopyTo(linear[at..]);
+                }
+
+                linearLow -= Vector512.LessThanOrEqual(bent + middle, low).AsInt64();
+                linearHigh -= Vector512.LessThanOrEqual(bent + middle, high).AsInt64();
             }
         }
 

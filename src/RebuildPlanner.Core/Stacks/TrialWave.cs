@@ -6,21 +6,20 @@ namespace RebuildPlanner.Core.Stacks;
 internal sealed class TrialWave
 {
     private readonly ITrialModel _model;
-    private readonly int _first, _end, _tiles;
+    private readonly int _tiles;
     private readonly ulong _seed;
-    private int _next;
+    private int _first, _end, _next;
 
-    /// <summary>Makes room for the sums.</summary>
+    /// <summary>Makes room for the sums, used wave after wave.</summary>
     /// <param name="model">What the trials are run on.</param>
-    /// <param name="first">The first block.</param>
-    /// <param name="end">The one after the last.</param>
+    /// <param name="mostBlocks">The most blocks of a wave.</param>
     /// <param name="tiles">Tiles a block.</param>
     /// <param name="seed">The seed of the run.</param>
-    public TrialWave(ITrialModel model, int first, int end, int tiles, ulong seed)
+    public TrialWave(ITrialModel model, int mostBlocks, int tiles, ulong seed)
     {
-        (_model, _first, _end, _tiles, _seed, _next) = (model, first, end, tiles, seed, first - 1);
-        Sums = new BlockSums[Blocks * model.Figures.Count];
-        Joint = new int[Blocks * model.Joints.Count];
+        (_model, _tiles, _seed) = (model, tiles, seed);
+        Sums = new BlockSums[mostBlocks * model.Figures.Count];
+        Joint = new int[mostBlocks * model.Joints.Count];
     }
 
     /// <summary>How many blocks.</summary>
@@ -32,10 +31,17 @@ internal sealed class TrialWave
     /// <summary>In how many trials of each block the limits of each joint held.</summary>
     public int[] Joint { get; }
 
-    /// <summary>Runs the blocks.</summary>
-    /// <exception cref="OperationCanceledException">The run was ended between two blocks.</exception>
-    public void Run(TrialBench[] benches, CancellationToken cancellation)
+    /// <summary>Runs blocks.</summary>
+    /// <param name="first">The first.</param>
+    /// <param name="end">The one after the last.</param>
+    /// <param name="benches">Who computes.</param>
+    /// <param name="cancellation">Ends the run between two blocks.</param>
+    /// <exception cref="OperationCanceledException">It was ended.</exception>
+    public void Run(int first, int end, TrialBench[] benches, CancellationToken cancellation)
     {
+        (_first, _end, _next) = (first, end, first - 1);
+        Array.Clear(Sums);
+        Array.Clear(Joint);
         Thread[] others = [.. benches.Skip(1).Take(Blocks - 1).Select(bench => new Thread(() => Run(bench, cancellation)))];
         Array.ForEach(others, thread => thread.Start());
         Run(benches[0], cancellation);

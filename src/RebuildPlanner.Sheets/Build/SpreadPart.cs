@@ -25,7 +25,7 @@ internal static class SpreadPart
                 new Column(words.Of(Phrase.To)), new Column(words.Of(Phrase.WorstFrom)), new Column(words.Of(Phrase.To)),
             ],
             rows);
-        if (results.RatioSpread is { Low: <= 0.0 })
+        if (results.RatioSpread is not null && !results.RatiosDiffer)
         {
             yield return new Paragraph(words.Of(Phrase.SpreadNone));
         }

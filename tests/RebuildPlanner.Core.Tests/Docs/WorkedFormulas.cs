@@ -220,7 +220,7 @@ internal static class WorkedFormulas
                 """),
         ];
         Job job = Workbench.Engine(2, Gauge(page, "burette", "cm3"), "\"readings\": [" + string.Join(",", readings) + "]");
-        ResultQuantity spread = StageResults.Of(job, Stage.AsReceived).ChamberSpread!;
+        ResultQuantity spread = StageResults.Of(job, Stage.AsReceived, new TrialOptions(Trials: 0)).ChamberSpread!;
         return new()
         {
             ["spread"] = spread.Value / Mm3PerCm3,

@@ -150,7 +150,7 @@ public class Jcgm101Tests
     }
 
     private static SampledFigure Sampled(ITrialModel model, TrialOptions options) =>
-        MonteCarlo.Run(model, options, cancellation: TestContext.Current.CancellationToken).Figures[0];
+        MonteCarlo.Run(model, options).Figures[0];
 
     private static EqualityComparer<(double Low, double High)> Near(double tolerance) => EqualityComparer<(double Low, double High)>.Create(
         (one, other) => Math.Abs(one.Low - other.Low) <= tolerance && Math.Abs(one.High - other.High) <= tolerance, _ => 0);

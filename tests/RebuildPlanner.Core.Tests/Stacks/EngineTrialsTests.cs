@@ -1,0 +1,145 @@
+using System.Text.Json;
+using RebuildPlanner.Core.Cylinders;
+using RebuildPlanner.Core.Jobs;
+using RebuildPlanner.Core.Numerics;
+using RebuildPlanner.Core.Stacks;
+using RebuildPlanner.Core.Tests.Jobs;
+using RebuildPlanner.Tests.Shared;
+
+namespace RebuildPlanner.Core.Tests.Stacks;
+
+public class EngineTrialsTests
+{
+    private static readonly Job _job = Workbench.Read(RepositoryFiles.Text("tests", "Reference", "example-job.json"));
+    private static readonly JsonElement _reference = JsonDocument.Parse(RepositoryFiles.Text("tests", "Reference", "example-results.json")).RootElement;
+
+    // 600 000 trials of an independent program, good to 0.01 u; ours are sure to two digits of u.
+    [Theory]
+    [InlineData(false, 0)]
+    [InlineData(false, 1)]
+    [InlineData(true, 0)]
+    [InlineData(true, 1)]
+    public void Limits_of_the_worked_job_agree_with_another_programs_trials(bool plain, int cylinder)
+    {
+        JsonElement known = _reference.GetProperty("cylinders")[cylinder];
+        Results results = StageResults.Of(_job, Stage.AsMachined, new TrialOptions(Plain: plain, Trials: plain ? 600_000 : null));
+        ResultQuantity ratio = results.Cylinders[cylinder].CompressionRatio!;
+
+        Assert.False(results.Trials!.FirstOrderHolds);
+        Assert.Equal(known.GetProperty("mc")[1].GetDouble(), ratio.Low!.Value, 0.03 * ratio.StandardUncertainty!.Value);
+        Assert.Equal(known.GetProperty("mc")[2].GetDouble(), ratio.High!.Value, 0.03 * ratio.StandardUncertainty!.Value);
+        Verdict verdict = results.Verdicts.First(verdict => verdict.What == "compression ratio" && verdict.Cylinder == known.GetProperty("cylinder").GetString());
+        Assert.Equal(known.GetProperty("pCR").GetDouble(), verdict.Probability!.Value, 0.005);
+    }
+
+    // The road with the linear part and the road without must meet: limits within three errors of 10⁶ plain trials.
+    [Theory]
+    [InlineData("van-four.json")]
+    [InlineData("fen-boat-three.json")]
+    public void Both_roads_meet(string sample)
+    {
+        Job job = Workbench.Read(RepositoryFiles.Text("samples", sample));
+        StageModel model = new(job, LastStage.Of(job));
+        FirstOrder firstOrder = new(model.Model);
+        EngineTrials trials = new(model.Model, firstOrder);
+        MonteCarlo controlled = MonteCarlo.Run(trials, new TrialOptions()), plain = MonteCarlo.Run(trials, new TrialOptions(Seed: 99, Trials: 1_000_000, Plain: true));
+
+        for (int cylinder = 0; cylinder < model.Model.Cylinders.Count; cylinder++)
+        {
+            foreach (Output output in new[] { Output.CompressionRatio, Output.ClearanceVolume, Output.TrappedRatio })
+            {
+                int place = trials.PlaceOf(output, cylinder)!.Value;
+                double u = firstOrder.StandardUncertainty(cylinder, output);
+                (double low, double high) = controlled.Figures[place].Symmetric();
+                Assert.True(controlled.Figures[place].IsControlled);
+                Assert.Equal(plain.Figures[place].Symmetric().Low, low, 0.03 * u);
+                Assert.Equal(plain.Figures[place].Symmetric().High, high, 0.03 * u);
+            }
+        }
+    }
+
+    [Fact]
+    public void Neither_threads_nor_repetition_change_a_bit_and_a_seed_does()
+    {
+        byte[] Of(TrialOptions options) => ResultsJson.Write(StageResults.Of(_job, Stage.AsMachined, options));
+
+        byte[] one = Of(new TrialOptions(Threads: 1));
+
+        Assert.Equal(one, Of(new TrialOptions(Threads: 1)));
+        Assert.Equal(one, Of(new TrialOptions(Threads: 2)));
+        Assert.Equal(one, Of(new TrialOptions(Threads: 7)));
+        Assert.NotEqual(one, Of(new TrialOptions(Seed: 2)));
+    }
+
+    [Fact]
+    public void Lanes_agree_with_plain_numbers_to_the_bit()
+    {
+        Random random = new(5);
+        for (int round = 0; round < 200; round++)
+        {
+            double[] x = [.. Enumerable.Range(0, Lanes.Count).Select(_ => 0.1 + (3.0 * random.NextDouble()))], y = [.. x.Reverse()];
+            Lanes lanes = Formula(new Lanes(System.Runtime.Intrinsics.Vector512.Create<double>(x)), new Lanes(System.Runtime.Intrinsics.Vector512.Create<double>(y)));
+            for (int lane = 0; lane < Lanes.Count; lane++)
+            {
+                Assert.Equal(Formula(new Real(x[lane]), new Real(y[lane])).Value, lanes.Values[lane]);
+            }
+        }
+
+        static T Formula<T>(T x, T y)
+            where T : struct, IScalar<T> =>
+            T.Sqrt(T.Square(x) + y) - (2.5 * T.Sin(x)) + (T.Cos(y) / T.Exp(-x)) + T.Log(y) + T.From(0.125);
+    }
+
+    [Fact]
+    public void A_run_is_broken_off_between_two_blocks()
+    {
+        StageModel model = new(_job, Stage.AsMachined);
+        using CancellationTokenSource broken = new();
+        long seen = 0;
+        Progress watcher = new(trials =>
+        {
+            seen = trials;
+            broken.Cancel();
+        });
+
+        Assert.Throws<OperationCanceledException>(() => MonteCarlo.Run(
+            new EngineTrials(model.Model, new FirstOrder(model.Model)), new TrialOptions(Trials: TrialOptions.MostTrials, Plain: true), watcher, broken.Token));
+        Assert.InRange(seen, 1, TrialOptions.MostTrials / 2);
+    }
+
+    // The standard's own: u 0.035 to one digit is 0.04, so δ is 0.005; to two it is 0.035 and δ is 0.0005. What rounds up to a new digit counts as that.
+    [Theory]
+    [InlineData(0.035, 1, 0.005)]
+    [InlineData(0.035, 2, 0.0005)]
+    [InlineData(0.0996, 2, 0.005)]
+    [InlineData(0.0994, 2, 0.0005)]
+    [InlineData(9.6, 1, 5.0)]
+    [InlineData(1.0, 1, 0.5)]
+    [InlineData(123.4, 2, 5.0)]
+    public void Tolerance_is_half_a_unit_of_the_last_digit(double u, int digits, double tolerance) =>
+        Assert.Equal(tolerance, MonteCarlo.Tolerance(u, digits), 1e-12 * tolerance);
+
+    // Memory does not grow with the trials: the same room for ten times as many.
+    [Fact]
+    public void Room_does_not_grow_with_the_trials()
+    {
+        StageModel model = new(_job, Stage.AsMachined);
+        EngineTrials trials = new(model.Model, new FirstOrder(model.Model));
+        long Bytes(int count)
+        {
+            long before = GC.GetAllocatedBytesForCurrentThread();
+            MonteCarlo.Run(trials, new TrialOptions(Trials: count, Plain: true, Threads: 1));
+            return GC.GetAllocatedBytesForCurrentThread() - before;
+        }
+
+        Bytes(200_000);
+        long few = Bytes(200_000), many = Bytes(2_000_000);
+
+        Assert.True(many < few + 200_000, $"{few} bytes for 200 000 trials, {many} for ten times as many");
+    }
+
+    private sealed class Progress(Action<long> report) : IProgress<long>
+    {
+        public void Report(long value) => report(value);
+    }
+}
