@@ -8,6 +8,7 @@ internal sealed class TrialBench(ITrialModel model, PreparedFigure[] prepared)
 {
     private readonly TrialTile _tile = new(model.Sources);
     private readonly ITrialWorker _worker = model.Worker();
+    private readonly FigureLimit[][] _joints = [.. model.Joints.Select(joint => joint.ToArray())];
     private readonly double[] _figures = new double[prepared.Length * TrialTile.Trials], _linear = new double[prepared.Length * TrialTile.Trials];
 
     public FigureTally[] Tallies { get; } = [.. prepared.Select(figure => new FigureTally(figure.Tally.From, figure.Tally.To))];
@@ -91,7 +92,7 @@ internal sealed class TrialBench(ITrialModel model, PreparedFigure[] prepared)
     {
         for (int number = 0; number < joint.Length; number++)
         {
-            IReadOnlyList<FigureLimit> limits = model.Joints[number];
+            FigureLimit[] limits = _joints[number];
             for (int at = 0; at < TrialTile.Trials; at += Vector512<double>.Count)
             {
                 Vector512<double> inside = Vector512<double>.AllBitsSet;

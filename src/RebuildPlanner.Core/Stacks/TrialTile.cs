@@ -77,7 +77,14 @@ public sealed class TrialTile
                 break;
             case SourceShape.Triangular:
                 double half = 0.5 * u * Math.Sqrt(6.0);
-                Combine(draws, -half, 2.0 * half, ref random, (one, other) => one + other);
+                Span<double> second = stackalloc double[Trials];
+                FillUniform(draws, -half, 2.0 * half, ref random);
+                FillUniform(second, -half, 2.0 * half, ref random);
+                for (int at = 0; at < draws.Length; at++)
+                {
+                    draws[at] += second[at];
+                }
+
                 break;
             case SourceShape.Arcsine:
                 FillUniform(draws, 0.0, TwoPi, ref random);
@@ -88,9 +95,7 @@ public sealed class TrialTile
 
                 break;
             case SourceShape.CurvilinearTrapezoid:
-                // The ends stand at −w and +w about a middle that is known: w is a rectangle of its own.
-                double inexact = Inexact(source), halfWidth = source.WorstHigh - inexact;
-                Combine(draws, 0.0, 1.0, ref random, (end, place) => (halfWidth - inexact + (2.0 * inexact * end)) * ((2.0 * place) - 1.0));
+                FillTrapezoid(draws, source.WorstHigh, Inexact(source), ref random);
                 break;
             default:
                 NormalDraws.Fill(draws, ref random);
@@ -114,14 +119,15 @@ public sealed class TrialTile
         }
     }
 
-    private static void Combine(Span<double> draws, double from, double width, ref RandomLanes random, Func<double, double, double> of)
+    // The ends stand at −w and +w about a middle that is known: w is a rectangle of its own, from a − d to a + d.
+    private static void FillTrapezoid(Span<double> draws, double most, double inexact, ref RandomLanes random)
     {
-        Span<double> others = stackalloc double[Trials];
-        FillUniform(draws, from, width, ref random);
-        FillUniform(others, from, width, ref random);
+        Span<double> ends = stackalloc double[Trials];
+        FillUniform(ends, most - (2.0 * inexact), 2.0 * inexact, ref random);
+        FillUniform(draws, -1.0, 2.0, ref random);
         for (int at = 0; at < draws.Length; at++)
         {
-            draws[at] = of(draws[at], others[at]);
+            draws[at] *= ends[at];
         }
     }
 
