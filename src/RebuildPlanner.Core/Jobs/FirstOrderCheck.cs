@@ -8,7 +8,8 @@ namespace RebuildPlanner.Core.Jobs;
 /// Error: that of the trials, which is held to δ for ratios and displacement.</remarks>
 internal static class FirstOrderCheck
 {
-    private const double NearlyAll = 0.998;
+    // What lies beyond would only make the rest narrow.
+    private const double NearlyAll = 0.98;
 
     /// <summary>Runs the trials and lets them count where first order fails.</summary>
     /// <returns>What was found, or null where nothing bends or no trials were wanted.</returns>

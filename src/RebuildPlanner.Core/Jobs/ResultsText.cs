@@ -42,10 +42,10 @@ public sealed class ResultsText(Results results, UnitSystem system)
         }
 
         string digits = trials.Options.Digits == 1 ? "one digit" : "two digits";
-        string run = string.Create(CultureInfo.InvariantCulture, $"{Thousands(trials.Trials)} trials, seed {trials.Options.Seed}{(trials.Options.Plain ? ", counted plainly" : "")}");
+        string run = string.Create(CultureInfo.InvariantCulture, $"{Trials} trials, seed {trials.Options.Seed}{(trials.Options.Plain ? ", counted plainly" : "")}");
         yield return trials.FirstOrderHolds
             ? $"Intervals and beliefs are of first order; trials agree to {digits} of the uncertainty ({run})."
-            : $"Intervals and beliefs are by trials, Monte Carlo ({run}); first order is off by more than {digits} allow, most at the {trials.FailsAt}{(trials.FailsOn is { } cylinder ? $" of cylinder {cylinder}" : "")}.";
+            : $"Intervals and beliefs are by trials, Monte Carlo ({run}); first order is off by more than {digits} of the uncertainty allow, furthest at the {trials.FailsAt}{(trials.FailsOn is { } cylinder ? $" of cylinder {cylinder}" : "")}.";
         if (!trials.FirstOrderHolds && results.RatioSpread is not null)
         {
             yield return "A spread by trials is biased upwards: measuring noise spreads even cylinders that are alike.";
@@ -57,7 +57,8 @@ public sealed class ResultsText(Results results, UnitSystem system)
         }
     }
 
-    private static string Thousands(long number) => number.ToString("#,0", CultureInfo.InvariantCulture).Replace(',', ' ');
+    /// <summary>How many trials were run, thousands set apart.</summary>
+    public string Trials => (results.Trials?.Trials ?? 0).ToString("#,0", CultureInfo.InvariantCulture).Replace(',', ' ');
 
     /// <summary>What is missing, a line a figure.</summary>
     public IEnumerable<string> Missing() =>

@@ -27,6 +27,7 @@ public static class BuildSheet
             .. OpeningPart.Missing(text, words),
             .. CylindersPart.Of(results, text, words),
             .. LimitsPart.Of(results, text, words),
+            .. FiguresPart.Trials(input, results),
             .. FiguresPart.Volumes(input, results, text),
             .. SpreadPart.Of(results, text, words),
             .. WorkPart.Of(input.Job, results.Stage, words),

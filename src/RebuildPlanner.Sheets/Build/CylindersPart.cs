@@ -14,6 +14,11 @@ internal static class CylindersPart
         (string, string) length = ("unit", text.Unit(QuantityKind.Length)), volume = ("unit", text.Unit(QuantityKind.Volume));
         yield return new Heading(words.Of(Phrase.CylindersHead), 2);
         yield return new Paragraph(words.Of(Phrase.CylindersLead), Style.Small);
+        foreach (string method in Method(results, text, words))
+        {
+            yield return new Paragraph(method, Style.Small);
+        }
+
         Table first = Known(
             results, words,
             (words.Of(Phrase.Ratio), cylinder => cylinder.CompressionRatio is null ? null : text.Value(cylinder.CompressionRatio)),
@@ -49,6 +54,35 @@ internal static class CylindersPart
         string? Value(ResultQuantity? quantity) => quantity is null ? null : text.Value(quantity);
 
         string? End(ResultQuantity? quantity, Func<ResultQuantity, double?> end) => quantity is null ? null : text.End(quantity, end);
+    }
+
+    private static IEnumerable<string> Method(Results results, ResultsText text, SheetWording words)
+    {
+        if (results.Trials is not { } trials)
+        {
+            yield break;
+        }
+
+        (string, string) run = ("trials", text.Trials), seed = ("seed", trials.Options.Seed.ToString(CultureInfo.InvariantCulture));
+        (string, string) digits = ("digits", words.Of(trials.Options.Digits == 1 ? Phrase.DigitOne : Phrase.DigitTwo));
+        if (trials.FailsAt is not { } fails)
+        {
+            yield return words.Of(Phrase.MethodFirstOrder, run, seed, digits);
+        }
+        else
+        {
+            string figure = trials.FailsOn is { } cylinder ? words.Of(Phrase.MethodFigure, ("figure", fails), ("cylinder", cylinder)) : fails;
+            yield return words.Of(Phrase.MethodTrials, run, seed, digits, ("figure", figure));
+            if (results.RatioSpread is not null)
+            {
+                yield return words.Of(Phrase.MethodSpread);
+            }
+        }
+
+        if (trials.IsCapped)
+        {
+            yield return words.Of(Phrase.MethodUnsure);
+        }
     }
 
     /// <summary>The parts of the clearance volume.</summary>

@@ -7,7 +7,7 @@ using RebuildPlanner.Sheets.Templates;
 
 namespace RebuildPlanner.Sheets.Build;
 
-/// <summary>The two figures of a sheet with what belongs to them.</summary>
+/// <summary>The figures of a sheet with what belongs to them.</summary>
 public static class FiguresPart
 {
     /// <summary>The clearance volume, drawn and in figures.</summary>
@@ -28,6 +28,16 @@ public static class FiguresPart
             yield return new Paragraph(words.Of(
                 Phrase.CrossCheck, ("cylinder", cylinder.Cylinder), ("value", text.Value(check)), ("unit", text.Unit(QuantityKind.Volume)),
                 ("low", text.End(check, q => q.Low)), ("high", text.End(check, q => q.High))));
+        }
+    }
+
+    /// <summary>How the trials of the ratio fell.</summary>
+    public static IEnumerable<Block> Trials(SheetInput input, Results results)
+    {
+        if (RatioTrials.Draw(results, input.Units, input.Words) is { } trials)
+        {
+            yield return new Heading(trials.Title, 2);
+            yield return new Illustration(trials, input.Words.Of(Phrase.TrialsCaption));
         }
     }
 

@@ -172,8 +172,8 @@ public static class VolumeBars
             + string.Join(", ", _parts.Select(part => $"{words.Of(part.Name)} {text.Value(part.Of(cylinder))}"))
             + $"; {words.Of(Phrase.VolumesTotal, ("value", text.Value(cylinder.ClearanceVolume)), ("unit", unit))}."));
 
-    // Before a bar there is room for six of the widest letters; the tables say a longer name whole.
-    private static string Short(string label)
+    /// <summary>A cylinder's label short enough for a figure: there is room for six of the widest letters, and the tables say a longer name whole.</summary>
+    internal static string Short(string label)
     {
         const int Most = 6;
         Rune[] letters = [.. PlainText.Of(label).EnumerateRunes()];

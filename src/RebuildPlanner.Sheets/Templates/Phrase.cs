@@ -6,10 +6,10 @@ public enum Phrase
 {
     Title, Subject, Foot, PageOf, Customer, Contact, Job, JobTitle, Opened, Engine, EngineUnnamed, EngineOfOne, Complaint, Asked,
     Stage, Issued, FuelRecorded, AnswerLead, AnswerSame, AnswerRange, AnswerNone, AnswerWithout, AnswerDisplacement, AnswerHeld,
-    AnswerOutside, AnswerOpen, AnswerNoLimits, AnswerMeaning, MissingHead, MissingLead, CylindersHead, CylindersLead, Cylinder,
+    AnswerOutside, AnswerOpen, AnswerNoLimits, AnswerMeaning, MissingHead, MissingLead, CylindersHead, CylindersLead, MethodFirstOrder, MethodTrials, MethodFigure, MethodSpread, MethodUnsure, DigitOne, DigitTwo, Cylinder,
     Ratio, From95, WorstFrom, To, Bore, Swept, Clearance, PistonToHead, Taper, OutOfRound, Trapped, Cranking, Doubt, Share,
     CrankingNote, LimitsHead, LimitsNone, LimitName, LimitOfCylinder, LimitOfPart, LimitWithin, LimitOutside, LimitOpen, LimitMissing,
-    LimitSettle, LimitNoSettle, LimitSettleCylinders, LimitsTable, All, VolumesHead, VolumesCaption, VolumesMissing, VolumesTotal, Chamber, Gasket, Deck, Crown,
+    LimitSettle, LimitNoSettle, LimitSettleCylinders, LimitsTable, All, TrialsHead, TrialsCaption, TrialsOfCylinder, VolumesHead, VolumesCaption, VolumesMissing, VolumesTotal, Chamber, Gasket, Deck, Crown,
     TopLand, CrossCheck, SectionHead, SectionCaption, SectionScale, SectionDetail, SectionStroke, SectionRod, SectionBore,
     SectionGap, SectionDeck, SectionGasket, SectionOpening, SectionTopLand, SectionHeadPart, SectionBlockPart, SectionPistonPart,
     SectionNoRod, SectionNoHeight, SpreadHead, SpreadName, SpreadValue, Displacement, SpreadRatio, SpreadChamber, SpreadNone,

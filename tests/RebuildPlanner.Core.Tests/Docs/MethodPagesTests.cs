@@ -3,7 +3,7 @@ namespace RebuildPlanner.Core.Tests.Docs;
 /// <summary>The pages of docs/methods are read by machinists and by this test: what they work out by hand, the program works out too.</summary>
 public class MethodPagesTests
 {
-    private const int PageCount = 19, LongestPage = 60;
+    private const int PageCount = 20, LongestPage = 60;
 
     public static TheoryData<string> Pages => [.. WorkedExample.Pages];
 

@@ -33,6 +33,7 @@ internal static class WorkedFormulas
         ["worst-case"] = Worst,
         ["verdicts"] = VerdictsOfGap,
         ["spread"] = Spread,
+        ["monte-carlo"] = Trials,
     };
 
     private static Dictionary<string, object> Crank(WorkedExample page)
@@ -228,6 +229,27 @@ internal static class WorkedFormulas
             ["half width 95"] = (spread.High!.Value - spread.Value) / Mm3PerCm3,
             ["worst low"] = spread.WorstLow!.Value / Mm3PerCm3,
             ["worst high"] = spread.WorstHigh!.Value / Mm3PerCm3,
+        };
+    }
+
+    private static Dictionary<string, object> Trials(WorkedExample page)
+    {
+        Job job = Workbench.Single(
+            $$"""
+            "engine": { "cylinders": 1, "stroke": "{{page.Text("stroke", "mm")}} ± 0 mm" }
+            """,
+            Given(("bore", page.Text("bore", "mm") + " ± 0 mm"), ("whole chamber", Limited(page, "chamber", "cm3")), ("plug hole", "0 cc ± 0 cc")));
+        ResultQuantity first = StageResults.Of(job, Stage.AsReceived, new TrialOptions(Trials: 0)).Cylinders[0].CompressionRatio!;
+        Results results = StageResults.Of(job, Stage.AsReceived);
+        ResultQuantity counted = results.Cylinders[0].CompressionRatio!;
+        return new()
+        {
+            ["first order low"] = first.Low!,
+            ["first order high"] = first.High!,
+            ["tolerance"] = MonteCarlo.Tolerance(first.StandardUncertainty!.Value, 2),
+            ["low"] = counted.Low!,
+            ["high"] = counted.High!,
+            ["which counts"] = results.Trials!.FirstOrderHolds ? "first order" : "trials",
         };
     }
 
