@@ -31,7 +31,10 @@ internal sealed class TrialRun
         TrialOptions usual = new();
         TrialOptions options = usual with
         {
-            Seed = (ulong)(parsed.GetValue(_seed) ?? (int)usual.Seed), Trials = parsed.GetValue(_trials), Digits = parsed.GetValue(_digits) ?? usual.Digits, Plain = parsed.GetValue(_plain),
+            Seed = (ulong)(parsed.GetValue(_seed) ?? (int)usual.Seed),
+            Trials = parsed.GetValue(_trials),
+            Digits = parsed.GetValue(_digits) ?? usual.Digits,
+            Plain = parsed.GetValue(_plain),
         };
         using CancellationTokenSource broken = new();
         void Break(object? sender, ConsoleCancelEventArgs key)

@@ -6,8 +6,9 @@ namespace RebuildPlanner.Core.Numerics;
 
 /// <summary>Eight numbers side by side: a formula in them is eight trials at once.</summary>
 /// <remarks>
-/// Sum, difference, product, quotient and root are rounded the same by every machine, with wide registers or without. The rest is asked of the
-/// framework one lane at a time: its wide forms fuse products with sums where the machine can, and the last bit would hang on that.
+/// Sum, difference, product, quotient and root are rounded the same by every machine, with wide registers or without, and sine and cosine are made of
+/// them. Exponential and logarithm are asked of the framework one lane at a time: its wide forms fuse products with sums where the machine can, and the
+/// last bit would hang on that.
 /// </remarks>
 public readonly record struct Lanes : IScalar<Lanes>
 {
@@ -58,10 +59,10 @@ public readonly record struct Lanes : IScalar<Lanes>
     public static Lanes Sqrt(Lanes x) => new(Vector512.Sqrt(x.Values));
 
     /// <inheritdoc/>
-    public static Lanes Sin(Lanes angleRad) => Each(angleRad, Math.Sin);
+    public static Lanes Sin(Lanes angleRad) => new(LaneSine.Sin(angleRad.Values));
 
     /// <inheritdoc/>
-    public static Lanes Cos(Lanes angleRad) => Each(angleRad, Math.Cos);
+    public static Lanes Cos(Lanes angleRad) => new(LaneSine.Cos(angleRad.Values));
 
     /// <inheritdoc/>
     public static Lanes Exp(Lanes x) => Each(x, Math.Exp);

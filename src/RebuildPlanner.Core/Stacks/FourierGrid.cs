@@ -1,4 +1,4 @@
-using System.Numerics;
+using System.Runtime.Intrinsics;
 using RebuildPlanner.Core.Numerics;
 
 namespace RebuildPlanner.Core.Stacks;
@@ -45,28 +45,28 @@ internal sealed class FourierGrid
     /// <summary>W of the given order at an offset the grid reaches.</summary>
     public double Tail(int order, double offset)
     {
-        Vector<double> sum = Vector<double>.Zero;
-        ReadOnlySpan<double> nodes = _t, weights = _weight;
-        for (int i = 0; i < nodes.Length; i += Vector<double>.Count)
+        // Always eight at a time, so that the sum is formed in one order on every machine.
+        Vector512<double> sum = Vector512<double>.Zero;
+        for (int i = 0; i < _t.Length; i += Vector512<double>.Count)
         {
-            Vector<double> t = new(nodes[i..]), weight = new(weights[i..]), angle = offset * t;
+            Vector512<double> t = Vector512.Create(_t, i), weight = Vector512.Create(_weight, i), angle = offset * t;
             if (order == 0)
             {
-                sum += weight * Vector.Sin(angle);
+                sum += weight * LaneSine.Sin(angle);
             }
             else if (order == 1)
             {
                 // 1 − cos as a square keeps its digits where the angle is small.
-                Vector<double> half = Vector.Sin(0.5 * angle);
+                Vector512<double> half = LaneSine.Sin(0.5 * angle);
                 sum += 2.0 * weight * half * half / t;
             }
             else
             {
-                sum += weight * (angle - Vector.Sin(angle)) / (t * t);
+                sum += weight * (angle - LaneSine.Sin(angle)) / (t * t);
             }
         }
 
-        double inverted = Vector.Sum(sum);
+        double inverted = Vector512.Sum(sum);
         return order switch
         {
             0 => 0.5 - inverted,

@@ -1,4 +1,4 @@
-using System.Numerics;
+using System.Runtime.Intrinsics;
 using RebuildPlanner.Core.Numerics;
 
 namespace RebuildPlanner.Core.Stacks;
@@ -114,13 +114,12 @@ internal sealed class InvertedTail : UpperTail
             phi[i] = value;
         }
 
-        int lanes = Vector<double>.Count;
         foreach (double halfWidth in _parts.HalfWidths)
         {
-            for (int i = 0; i < t.Length; i += lanes)
+            for (int i = 0; i < t.Length; i += Lanes.Count)
             {
-                Vector<double> x = halfWidth * new Vector<double>(t[i..]);
-                (new Vector<double>(phi[i..]) * Vector.Sin(x) / x).CopyTo(phi[i..]);
+                Vector512<double> x = halfWidth * Vector512.Create(t[i..]);
+                (Vector512.Create<double>(phi[i..]) * LaneSine.Sin(x) / x).CopyTo(phi[i..]);
             }
         }
     }
