@@ -3,9 +3,9 @@ using RebuildPlanner.Benchmarks;
 
 // Ratios are taken within one run, rival and program by turns on one machine: a time of its own says nothing on another one.
 string word = args.FirstOrDefault(arg => !arg.StartsWith('-')) ?? "all";
-if (word is not ("all" or "first-order" or "process" or "sheet" or "store"))
+if (word is not ("all" or "first-order" or "process" or "sheet" or "store" or "trials"))
 {
-    Console.Error.WriteLine($"{word}: there is no such benchmark; write first-order, process, sheet or store, or nothing for all.");
+    Console.Error.WriteLine($"{word}: there is no such benchmark; write first-order, process, sheet, store or trials, or nothing for all.");
     return 2;
 }
 
@@ -29,6 +29,11 @@ if (word is "all" or "sheet")
 if (word is "all" or "store")
 {
     StoreBenchmark.Run();
+}
+
+if (word is "all" or "trials")
+{
+    agreed &= TrialsBenchmark.Run();
 }
 
 return agreed ? 0 : 1;
