@@ -10,21 +10,21 @@ internal sealed record PreparedFigure(TrialFigure Figure, FigureTally Tally, Lin
         double low = sorted.Length == 0 ? figure.Value : sorted[(int)(0.025 * (sorted.Length - 1))];
         double high = sorted.Length == 0 ? figure.Value : sorted[(int)Math.Ceiling(0.975 * (sorted.Length - 1))];
         LinearSum? linear = figure.Row is { } row && LinearSum.Takes(sources, row) ? new LinearSum(sources, row) : null;
-        if (linear is { StandardUncertainty: > 0.0 })
+        if (linear is not { StandardUncertainty: > 0.0 })
         {
-            double half = linear.HalfWidth(MonteCarlo.Coverage);
-            (double lowCheck, double highCheck) = (figure.Bent(-half), figure.Bent(half));
-            if (double.IsFinite(highCheck))
-            {
-                return new(figure, Between(Math.Min(low, lowCheck), Math.Max(high, highCheck)), linear, !plain, half, lowCheck, highCheck)
-                {
-                    Variance = Propagation.VarianceOfLaws(sources, figure.Row!),
-                    LeastFreedom = Propagation.LeastFreedom(sources, figure.Row!),
-                };
-            }
+            return new(figure, Between(low, high), null, false, 0.0, low, high);
         }
 
-        return new(figure, Between(low, high), null, false, 0.0, low, high);
+        // A control that has no end within the interval is of no use; the straight line is still there, to be found wanting.
+        double half = linear.HalfWidth(MonteCarlo.Coverage);
+        bool ends = double.IsFinite(figure.Bent(half));
+        (double lowCheck, double highCheck) = ends ? (figure.Bent(-half), figure.Bent(half)) : (low, high);
+        return new(
+            figure, Between(Math.Min(low, lowCheck), Math.Max(high, highCheck)), linear, ends && !plain, half, lowCheck, highCheck)
+        {
+            Variance = Propagation.VarianceOfLaws(sources, figure.Row!),
+            LeastFreedom = Propagation.LeastFreedom(sources, figure.Row!),
+        };
     }
 
     /// <summary>The variance of the linear part, without bound where a pool has two degrees of freedom or fewer.</summary>

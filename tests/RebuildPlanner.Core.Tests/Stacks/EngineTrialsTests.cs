@@ -106,6 +106,25 @@ public class EngineTrialsTests
             T.Sqrt(T.Square(x) + y) - (2.5 * T.Sin(x)) + (T.Cos(y) / T.Exp(-x)) + T.Log(y) + T.From(0.125);
     }
 
+    // The straight line reaches where no clearance is left, and there the control has no end: first order fails worst, and must not pass for lack of one.
+    [Fact]
+    public void First_order_that_reaches_past_all_clearance_does_not_hold()
+    {
+        Job job = Workbench.Read(
+            """
+            { "format": "rebuild-planner-job", "version": 1, "job": { "number": "T-1" }, "engine": { "cylinders": 1, "stroke": "90 mm ± 0 mm" },
+              "given": [ { "what": "bore", "value": "80 mm ± 0 mm" }, { "what": "chamber", "value": "20 cc ± 19.4 cc" }, { "what": "crown", "value": "8 cc ± 0 cc dome" },
+                { "what": "gasket thickness", "value": "1 mm ± 0 mm" }, { "what": "gasket opening", "value": "80 mm ± 0 mm" }, { "what": "deck", "value": "0 mm ± 0 mm flush" } ] }
+            """);
+
+        Results results = StageResults.Of(job, Stage.AsReceived);
+
+        Assert.False(results.Trials!.FirstOrderHolds);
+        Assert.Equal("compression ratio", results.Trials.FailsAt);
+        Assert.Equal((19.4 - (12.0 + (Math.PI / 4.0 * 6.4))) / 38.8, results.Trials.WithoutClearance, 0.01); // what of the rectangle leaves no clearance
+        Assert.Contains(results.Cautions, caution => caution.Code == "clearance-in-doubt");
+    }
+
     [Fact]
     public void A_run_is_broken_off_between_two_blocks()
     {
