@@ -126,7 +126,7 @@ internal static class ResultsScreen
         Add("spread of chambers", results.ChamberSpread);
         table.Columns[0].LeftAligned();
         Write(console, "Engine", table, table.Rows.Count > 0);
-        if (results.RatioSpread is not null && !results.RatiosDiffer)
+        if (results.RatiosDiffer == false)
         {
             Line(console, "Between the ratios of the cylinders no difference is proven.");
         }

@@ -35,7 +35,8 @@ internal static class ByTurns
         return code is 0 or 1 ? time : throw new InvalidOperationException($"{program} ended with {code}.\n{error}");
     }
 
-    private static double Median(List<double> times)
+    /// <summary>The median.</summary>
+    public static double Median(IEnumerable<double> times)
     {
         double[] sorted = [.. times.Order()];
         return sorted.Length % 2 == 1 ? sorted[sorted.Length / 2] : 0.5 * (sorted[(sorted.Length / 2) - 1] + sorted[sorted.Length / 2]);

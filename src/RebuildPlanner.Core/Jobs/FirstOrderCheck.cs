@@ -55,7 +55,7 @@ internal static class FirstOrderCheck
     private static (string? Word, int? Cylinder) WorstFailure(StageModel model, EngineTrials trials, MonteCarlo run)
     {
         double worst = 1.0;
-        (string?, int?) at = (null, null);
+        (string?, int?) found = (null, null);
         for (int cylinder = 0; cylinder < model.Model.Cylinders.Count; cylinder++)
         {
             foreach ((Output output, string word) in EngineTrials.Bent)
@@ -65,18 +65,17 @@ internal static class FirstOrderCheck
         }
 
         Compare(trials.Displacement, "displacement", null);
-        return at;
+        return found;
 
         void Compare(int? place, string word, int? cylinder)
         {
-            if (place is { } figure && run.Figures[figure].FirstOrder is { } first)
+            if (place is { } at && run.Figures[at] is { FirstOrder: { } first } figure)
             {
-                (double low, double high) = run.Figures[figure].Symmetric(StageResults.Coverage);
-                double tolerance = MonteCarlo.Tolerance(Propagation.StandardUncertainty(trials.Sources, trials.Figures[figure].Row!), run.Options.Digits);
-                double off = Math.Max(Math.Abs(first.Low - low), Math.Abs(first.High - high)) / tolerance;
+                (double low, double high) = figure.Symmetric(StageResults.Coverage);
+                double off = Math.Max(Math.Abs(first.Low - low), Math.Abs(first.High - high)) / figure.Tolerance(run.Options.Digits);
                 if (off > worst)
                 {
-                    (worst, at) = (off, (word, cylinder));
+                    (worst, found) = (off, (word, cylinder));
                 }
             }
         }

@@ -126,6 +126,22 @@ public sealed record MissingFigure(string What, string Cylinder);
 public sealed record ProvenanceLine(
     string What, string Cylinder, FigureKind Kind, Stage? Stage, string? From, string? Gauge, ResultQuantity Value, string? Written);
 
+/// <summary>What is to be said of the method behind intervals and beliefs.</summary>
+public enum MethodNote
+{
+    /// <summary>They are of first order, and trials agree.</summary>
+    FirstOrder,
+
+    /// <summary>They are by trials, since first order is off.</summary>
+    Trials,
+
+    /// <summary>A spread by trials is biased upwards.</summary>
+    SpreadIsBiased,
+
+    /// <summary>The trials ended before the digits wanted were sure.</summary>
+    Unsure,
+}
+
 /// <summary>What trials showed of first order, and how they were run.</summary>
 /// <param name="Options">How they were run.</param>
 /// <param name="Trials">How many.</param>
@@ -154,11 +170,31 @@ public sealed record Results(string Job, Stage Stage)
     /// <summary>The trials behind the results, or null where none were run.</summary>
     public TrialReport? Trials { get; init; }
 
+    /// <summary>What is to be said of the method, in order; nothing where no trials were run.</summary>
+    public IEnumerable<MethodNote> Method()
+    {
+        if (Trials is not { } trials)
+        {
+            yield break;
+        }
+
+        yield return trials.FirstOrderHolds ? MethodNote.FirstOrder : MethodNote.Trials;
+        if (!trials.FirstOrderHolds && RatioSpread is not null)
+        {
+            yield return MethodNote.SpreadIsBiased;
+        }
+
+        if (trials.IsCapped)
+        {
+            yield return MethodNote.Unsure;
+        }
+    }
+
     /// <summary>How the trials of each cylinder's ratio fell, or null where none were run or no ratio is in doubt.</summary>
     public RatioPicture? RatioPicture { get; init; }
 
-    /// <summary>Whether first order proves a difference between the cylinders with the largest and the smallest ratio.</summary>
-    public bool RatiosDiffer { get; init; }
+    /// <summary>Whether first order proves a difference between the cylinders with the largest and the smallest ratio; null where there is no spread.</summary>
+    public bool? RatiosDiffer { get; init; }
 
     /// <summary>Sum of the swept volumes.</summary>
     public ResultQuantity? Displacement { get; init; }

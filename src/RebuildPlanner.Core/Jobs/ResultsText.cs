@@ -34,27 +34,19 @@ public sealed class ResultsText(Results results, UnitSystem system)
     }
 
     /// <summary>Which reading of the model the intervals and beliefs are of, and how sure that is; nothing where no figure is in doubt.</summary>
-    public IEnumerable<string> Method()
-    {
-        if (results.Trials is not { } trials)
-        {
-            yield break;
-        }
+    public IEnumerable<string> Method() => results.Method().Select(note => Said(note, results.Trials!));
 
+    private string Said(MethodNote note, TrialReport trials)
+    {
         string digits = trials.Options.Digits == 1 ? "one digit" : "two digits";
         string run = string.Create(CultureInfo.InvariantCulture, $"{Trials} trials, seed {trials.Options.Seed}{(trials.Options.Plain ? ", counted plainly" : "")}");
-        yield return trials.FirstOrderHolds
-            ? $"Intervals and beliefs are of first order; trials agree to {digits} of the uncertainty ({run})."
-            : $"Intervals and beliefs are by trials, Monte Carlo ({run}); first order is off by more than {digits} of the uncertainty allow, furthest at the {trials.FailsAt}{(trials.FailsOn is { } cylinder ? $" of cylinder {cylinder}" : "")}.";
-        if (!trials.FirstOrderHolds && results.RatioSpread is not null)
+        return note switch
         {
-            yield return "A spread by trials is biased upwards: measuring noise spreads even cylinders that are alike.";
-        }
-
-        if (trials.IsCapped)
-        {
-            yield return $"The trials ended before {digits} were sure.";
-        }
+            MethodNote.FirstOrder => $"Intervals and beliefs are of first order; trials agree to {digits} of the uncertainty ({run}).",
+            MethodNote.Trials => $"Intervals and beliefs are by trials, Monte Carlo ({run}); first order is off by more than {digits} of the uncertainty allow, furthest at the {trials.FailsAt}{(trials.FailsOn is { } cylinder ? $" of cylinder {cylinder}" : "")}.",
+            MethodNote.SpreadIsBiased => "A spread by trials is biased upwards: measuring noise spreads even cylinders that are alike.",
+            _ => $"The trials ended before {digits} were sure.",
+        };
     }
 
     /// <summary>How many trials were run, thousands set apart.</summary>

@@ -33,9 +33,9 @@ public sealed class StageFigures
     /// <summary>Takes trials in, to count in the place of first order or to stand behind it.</summary>
     public void Take(EngineTrials trials, MonteCarlo run, bool count) => (_trials, Run, TrialsCount) = (trials, run, count);
 
-    /// <summary>Whether first order proves the spread of an output to be one: the extreme pair differs by more than its half-width.</summary>
+    /// <summary>Whether first order proves a spread to be one: the extreme pair differs by more than its half-width.</summary>
     /// <remarks>Trials cannot tell: the largest of equal cylinders less the smallest is above zero in every one of them.</remarks>
-    public bool Differs(Output output) => Spread(output) is { } spread && FirstOrderLimits(spread.Value, [.. spread.Row]).Low > 0.0;
+    public bool Differs(LinearFigure spread) => FirstOrderLimits(spread.Value, [.. spread.Row]).Low > 0.0;
 
     /// <summary>Sum of the swept volumes, or null where one is missing, mm³.</summary>
     public LinearFigure? Displacement
@@ -58,13 +58,7 @@ public sealed class StageFigures
     /// <summary>One output of one cylinder, or null where its figures do not suffice.</summary>
     public LinearFigure? Of(Output output, int cylinder)
     {
-        if (!_model.Model.Cylinders[cylinder].Known[(int)output] || !double.IsFinite(FirstOrder.Value(cylinder, output)))
-        {
-            return null;
-        }
-
-        bool needsClearance = output is Output.CompressionRatio or Output.TrappedRatio or Output.CrankingPressure;
-        if (needsClearance && FirstOrder.Value(cylinder, Output.ClearanceVolume) <= 0.0)
+        if (!FirstOrder.IsKnown(cylinder, output))
         {
             return null;
         }

@@ -25,15 +25,16 @@ public static class StageResults
         StageFigures figures = new(model);
         Verdicts verdicts = new(model, figures);
         (TrialReport? report, RatioPicture? picture) = FirstOrderCheck.Run(model, figures, verdicts, options ?? new TrialOptions(), progress, cancellation);
+        LinearFigure? ratioSpread = figures.Spread(Output.CompressionRatio), chamberSpread = figures.Spread(Output.Chamber);
         return new Results(job.Number, stage)
         {
             Trials = report,
             RatioPicture = picture,
-            RatiosDiffer = figures.Differs(Output.CompressionRatio),
+            RatiosDiffer = ratioSpread is null ? null : figures.Differs(ratioSpread),
             Displacement = figures.Displacement is { } displacement ? figures.Quantity(displacement, QuantityKind.Volume) : null,
             Cylinders = [.. Enumerable.Range(0, job.Engine.Cylinders).Select(cylinder => CylinderOf(model, figures, cylinder))],
-            RatioSpread = SpreadOf(figures, Output.CompressionRatio, QuantityKind.Ratio),
-            ChamberSpread = SpreadOf(figures, Output.Chamber, QuantityKind.Volume),
+            RatioSpread = ratioSpread is null ? null : figures.Quantity(ratioSpread, QuantityKind.Ratio, neverNegative: true),
+            ChamberSpread = chamberSpread is null ? null : figures.Quantity(chamberSpread, QuantityKind.Volume, neverNegative: true),
             Verdicts = verdicts.All(),
             Cautions = Cautions.Of(model, figures, report),
             Missing = model.Missing,
@@ -77,7 +78,4 @@ public static class StageResults
             .OrderByDescending(share => share.Share)
             .Select(share => new ResultShare(WhatWords.Of(share.What), share.Share)),
     ];
-
-    private static ResultQuantity? SpreadOf(StageFigures figures, Output output, QuantityKind kind) =>
-        figures.Spread(output) is { } spread ? figures.Quantity(spread, kind, neverNegative: true) : null;
 }

@@ -16,14 +16,7 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
     {
         foreach ((Limit limit, int number) in model.Job.Limits.Select((limit, number) => (limit, number)).Where(asked => IsJudged(asked.limit)))
         {
-            Output? output = limit.Subject.Derived switch
-            {
-                Derived.CompressionRatio => Output.CompressionRatio,
-                Derived.TrappedRatio => Output.TrappedRatio,
-                Derived.CrankingPressure => Output.CrankingPressure,
-                _ => null,
-            };
-            if (output is { } bent && limit.Place.Cylinder is null && trials.AddJoint(bent, [.. Covered(limit)], Least(limit), Most(limit)) is { } joint)
+            if (OutputOf(limit.Subject) is { } output && limit.Place.Cylinder is null && trials.AddJoint(output, [.. Covered(limit)], Least(limit), Most(limit)) is { } joint)
             {
                 _jointOf.Add(number, joint);
             }
@@ -78,15 +71,22 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
         };
     }
 
+    /// <summary>The output of a cylinder that a subject is, or null where it is a reading or found from readings.</summary>
+    private static Output? OutputOf(Subject subject) => subject.Derived switch
+    {
+        Derived.CompressionRatio => Output.CompressionRatio,
+        Derived.TrappedRatio => Output.TrappedRatio,
+        Derived.CrankingPressure => Output.CrankingPressure,
+        Derived.PistonToHead => Output.PistonToHead,
+        _ => null,
+    };
+
     private Line LineOf(Limit limit, int cylinder, string? label)
     {
         string? lacks = null;
         LinearFigure? figure = limit.Subject switch
         {
-            { Derived: Derived.CompressionRatio } => figures.Of(Output.CompressionRatio, cylinder),
-            { Derived: Derived.TrappedRatio } => figures.Of(Output.TrappedRatio, cylinder),
-            { Derived: Derived.CrankingPressure } => figures.Of(Output.CrankingPressure, cylinder),
-            { Derived: Derived.PistonToHead } => figures.Of(Output.PistonToHead, cylinder),
+            var subject when OutputOf(subject) is { } output => figures.Of(output, cylinder),
             { Derived: Derived.Taper } => figures.Taper(cylinder),
             { Derived: Derived.OutOfRound } => figures.OutOfRound(cylinder),
             { Derived: Derived.BoreClearance } => Difference(What.Bore, What.Skirt, 1.0),
@@ -154,9 +154,7 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
         }
 
         LinearFigure[] judged = [.. lines.Select(line => line.Figure!)];
-        double probability = cylinder is null && judged.Length > 1 && figures is { TrialsCount: true, Run: { } run } && _jointOf.TryGetValue(number, out int joint) ? run.Joint(joint)
-            : figures.TrialsCount && judged is [{ Sampled: { } sampled }] ? sampled.Inside(Least(limit), Most(limit))
-            : Probability(limit, [.. judged.Select(figure => figure.Row.ToArray())], judged);
+        double probability = Counted(limit, number, judged) ?? Probability(limit, [.. judged.Select(figure => figure.Row.ToArray())], judged);
         string? unstated = Unstated(judged);
         VerdictState state = Decide(probability, level);
         if (state == VerdictState.Within && unstated is not null)
@@ -170,6 +168,13 @@ public sealed class Verdicts(StageModel model, StageFigures figures)
 
     private static VerdictState Decide(double probability, double level) =>
         probability >= level ? VerdictState.Within : probability <= 1.0 - level ? VerdictState.Outside : VerdictState.NotProven;
+
+    /// <summary>The probability by trials, or null where those of first order count or nothing that is judged was drawn.</summary>
+    private double? Counted(Limit limit, int number, LinearFigure[] judged) =>
+        figures is not { TrialsCount: true, Run: { } run } ? null
+        : judged is [{ } only] ? only.Sampled?.Inside(Least(limit), Most(limit))
+        : _jointOf.TryGetValue(number, out int joint) ? run.Joint(joint)
+        : null;
 
     private IEnumerable<int> Covered(Limit limit) =>
         Enumerable.Range(0, model.Job.Engine.Cylinders).Where(cylinder => model.Search.Parts.Covers(limit.Place, cylinder));

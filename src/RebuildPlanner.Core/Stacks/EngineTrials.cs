@@ -28,7 +28,6 @@ public sealed class EngineTrials : ITrialModel
     private readonly List<TrialFigure> _figures = [];
     private readonly int[] _placeOf;
     private readonly Dictionary<Output, int> _spreadOf = [];
-    private readonly int _displacement = -1;
     private readonly List<IReadOnlyList<FigureLimit>> _joints = [];
 
     /// <summary>Lays out the figures of an engine.</summary>
@@ -44,10 +43,10 @@ public sealed class EngineTrials : ITrialModel
         {
             foreach (Output output in _bent)
             {
-                if (IsKnown(output, cylinder))
+                if (firstOrder.IsKnown(cylinder, output))
                 {
-                    _placeOf[(cylinder * CylinderStack<Lanes>.Count) + (int)output] = _figures.Count;
-                    _figures.Add(new TrialFigure(firstOrder.Value(cylinder, output), firstOrder.Row(cylinder, output), output == Output.CompressionRatio, PoleOf(output)));
+                    _placeOf[(cylinder * CylinderStack<Lanes>.Count) + (int)output] =
+                        Add(new TrialFigure(firstOrder.Value(cylinder, output), firstOrder.Row(cylinder, output), output == Output.CompressionRatio, PoleOf(output)));
                 }
             }
         }
@@ -64,7 +63,7 @@ public sealed class EngineTrials : ITrialModel
                 }
             }
 
-            _displacement = Add(new TrialFigure(Enumerable.Range(0, cylinders).Sum(cylinder => firstOrder.Value(cylinder, Output.SweptVolume)), row));
+            Displacement = Add(new TrialFigure(Enumerable.Range(0, cylinders).Sum(cylinder => firstOrder.Value(cylinder, Output.SweptVolume)), row));
         }
 
         foreach (Output output in cylinders > 1 ? new[] { Output.CompressionRatio, Output.Chamber } : [])
@@ -87,7 +86,7 @@ public sealed class EngineTrials : ITrialModel
     public IReadOnlyList<IReadOnlyList<FigureLimit>> Joints => _joints;
 
     /// <summary>Where the sum of the swept volumes stands, or null.</summary>
-    public int? Displacement => _displacement < 0 ? null : _displacement;
+    public int? Displacement { get; }
 
     /// <summary>Where one output of one cylinder stands, or null where it is missing or its law is known without trials.</summary>
     public int? PlaceOf(Output output, int cylinder) => _placeOf[(cylinder * CylinderStack<Lanes>.Count) + (int)output] is >= 0 and int place ? place : null;
@@ -121,11 +120,7 @@ public sealed class EngineTrials : ITrialModel
         return _figures.Count - 1;
     }
 
-    private bool IsKnown(Output output, int cylinder) =>
-        _model.Cylinders[cylinder].Known[(int)output] && double.IsFinite(_firstOrder.Value(cylinder, output))
-        && (output is not (Output.CompressionRatio or Output.TrappedRatio or Output.CrankingPressure) || _firstOrder.Value(cylinder, Output.ClearanceVolume) > 0.0);
-
-    private bool IsKnownOfAll(Output output) => Enumerable.Range(0, _model.Cylinders.Count).All(cylinder => IsKnown(output, cylinder));
+    private bool IsKnownOfAll(Output output) => Enumerable.Range(0, _model.Cylinders.Count).All(cylinder => _firstOrder.IsKnown(cylinder, output));
 
     /// <summary>One who computes: each distinct input once a tile, then the stack of every cylinder, eight trials at a time.</summary>
     private sealed class CylinderBench(EngineTrials trials) : ITrialWorker
@@ -224,8 +219,7 @@ public sealed class EngineTrials : ITrialModel
                 if (trials.PlaceOf(output, cylinder) is { } place)
                 {
                     Vector512<double> figure = stack[(int)output].Values;
-                    bool needsClearance = output is Output.CompressionRatio or Output.TrappedRatio or Output.CrankingPressure;
-                    (needsClearance ? Vector512.ConditionalSelect(clear, figure, none) : figure).CopyTo(figures[((place * TrialTile.Trials) + at)..]);
+                    (FirstOrder.NeedsClearance(output) ? Vector512.ConditionalSelect(clear, figure, none) : figure).CopyTo(figures[((place * TrialTile.Trials) + at)..]);
                 }
             }
 

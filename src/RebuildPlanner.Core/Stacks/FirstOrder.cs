@@ -56,6 +56,14 @@ public sealed class FirstOrder
     /// <summary>The output at the estimates, coherent unit.</summary>
     public double Value(int cylinder, Output output) => _values[(cylinder * Outputs) + (int)output];
 
+    /// <summary>Whether the output's figures are all there and make sense together: without clearance there is no ratio.</summary>
+    public bool IsKnown(int cylinder, Output output) =>
+        _model.Cylinders[cylinder].Known[(int)output] && double.IsFinite(Value(cylinder, output))
+        && !(NeedsClearance(output) && Value(cylinder, Output.ClearanceVolume) <= 0.0);
+
+    /// <summary>Whether an output is a quotient with the clearance volume below the line.</summary>
+    public static bool NeedsClearance(Output output) => output is Output.CompressionRatio or Output.TrappedRatio or Output.CrankingPressure;
+
     /// <summary>Change of the output for a unit of each source, in a new array.</summary>
     public double[] Row(int cylinder, Output output)
     {

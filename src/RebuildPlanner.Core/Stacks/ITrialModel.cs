@@ -1,3 +1,5 @@
+using RebuildPlanner.Core.Numerics;
+
 namespace RebuildPlanner.Core.Stacks;
 
 /// <summary>What trials are run on: doubts in, figures out.</summary>
@@ -45,8 +47,16 @@ public sealed record TrialFigure(double Value, double[]? Row, bool Decides = tru
             return Value + linear;
         }
 
-        double above = Value - pole, turned = 1.0 - (linear / above);
-        return turned > 0.0 ? pole + (above / turned) : double.PositiveInfinity;
+        double turned = Turned(Value, pole, new Real(linear)).Value;
+        return turned > pole ? turned : double.PositiveInfinity;
+    }
+
+    /// <summary>p + (v − p)/(1 − l/(v − p)): beyond the pole of the reciprocal it comes out at p and below.</summary>
+    internal static T Turned<T>(double value, double pole, T linear)
+        where T : struct, IScalar<T>
+    {
+        T above = T.From(value - pole);
+        return T.From(pole) + (above / (T.From(1.0) - (linear / above)));
     }
 
     /// <summary>The linear part that is bent to a figure; −∞ at the pole and below.</summary>

@@ -20,7 +20,7 @@ public sealed class MonteCarlo
     // Streams that no block of the run has.
     private const ulong Pilot = ulong.MaxValue;
 
-    // A probability of several limits together is counted until it is this sure, or sure to be on one side of what is asked.
+    // A probability of several limits together is counted until it is this sure.
     private const double JointError = 0.005;
 
     private readonly long[] _joint;
@@ -120,10 +120,9 @@ public sealed class MonteCarlo
                 continue;
             }
 
-            double u = model.Figures[figure].Row is { } known ? Propagation.StandardUncertainty(model.Sources, known) : _figures[figure].StandardUncertainty;
-            double tolerance = Tolerance(u, Options.Digits);
+            double tolerance = _figures[figure].Tolerance(Options.Digits);
             (double mean, double spread, double low, double high) = _figures[figure].TwiceErrors();
-            if (u > 0.0 && (mean > tolerance || spread > tolerance || low > tolerance || high > tolerance))
+            if (mean > tolerance || spread > tolerance || low > tolerance || high > tolerance)
             {
                 return false;
             }

@@ -19,8 +19,7 @@ internal sealed record PreparedFigure(TrialFigure Figure, FigureTally Tally, Lin
         double half = linear.HalfWidth(MonteCarlo.Coverage);
         bool ends = double.IsFinite(figure.Bent(half));
         (double lowCheck, double highCheck) = ends ? (figure.Bent(-half), figure.Bent(half)) : (low, high);
-        return new(
-            figure, Between(Math.Min(low, lowCheck), Math.Max(high, highCheck)), linear, ends && !plain, half, lowCheck, highCheck)
+        return new(figure, Between(Math.Min(low, lowCheck), Math.Max(high, highCheck)), linear, ends && !plain, half, lowCheck, highCheck)
         {
             Variance = Propagation.VarianceOfLaws(sources, figure.Row!),
             LeastFreedom = Propagation.LeastFreedom(sources, figure.Row!),

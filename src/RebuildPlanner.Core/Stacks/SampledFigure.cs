@@ -44,16 +44,11 @@ public sealed class SampledFigure
     public double StandardUncertainty => double.IsPositiveInfinity(_linearVariance) ? double.PositiveInfinity
         : IsControlled ? _controlledSpread.Mean : _spread.Mean;
 
-    /// <summary>The limits of the interval that holds the figure with a probability, as much left out below as above.</summary>
-    public (double Low, double High) Symmetric(double coverage = MonteCarlo.Coverage)
-    {
-        if (coverage != MonteCarlo.Coverage)
-        {
-            return (At(0.5 * (1.0 - coverage)), At(0.5 * (1.0 + coverage)));
-        }
+    /// <summary>How sure its ends must be: half a unit of the last digit wanted of its u, first order's where there is one.</summary>
+    public double Tolerance(int digits) => MonteCarlo.Tolerance(_linear?.StandardUncertainty ?? StandardUncertainty, digits);
 
-        return _usual ??= (At(0.5 * (1.0 - coverage)), At(0.5 * (1.0 + coverage)));
-    }
+    /// <summary>The limits of the interval that holds the figure with a probability, as much left out below as above.</summary>
+    public (double Low, double High) Symmetric(double coverage = MonteCarlo.Coverage) => coverage == MonteCarlo.Coverage ? _usual ??= Ends(coverage) : Ends(coverage);
 
     /// <summary>The limits of the narrowest interval that holds the figure with a probability.</summary>
     /// <remarks>Source: jcgm101 (5.3.4, 7.7.2). Valid for: one summit. Error: that of counting, greatest where the density is level.</remarks>
@@ -128,6 +123,8 @@ public sealed class SampledFigure
         _lowDifference.Add((sums.BelowLow - sums.LinearBelowLow) / n);
         _highDifference.Add((sums.BelowHigh - sums.LinearBelowHigh) / n);
     }
+
+    private (double Low, double High) Ends(double coverage) => (At(0.5 * (1.0 - coverage)), At(0.5 * (1.0 + coverage)));
 
     private double Density(double y)
     {

@@ -35,8 +35,7 @@ internal sealed class TrialBench(ITrialModel model, PreparedFigure[] prepared)
         Vector512<double> middle = Vector512.Create(value), low = Vector512.Create(prepared.LowCheck), high = Vector512.Create(prepared.HighCheck);
         Vector512<double> sum = default, squares = default, difference = default, differences = default;
         Vector512<long> belowLow = default, belowHigh = default, linearLow = default, linearHigh = default, without = default;
-        bool controlled = prepared.Controls, bends = prepared.Figure.Pole is not null;
-        Vector512<double> pole = Vector512.Create(prepared.Figure.Pole ?? 0.0), above = middle - pole;
+        bool controlled = prepared.Controls;
         for (int at = 0; at < figure.Length; at += Vector512<double>.Count)
         {
             Vector512<double> y = Vector512.Create<double>(figure[at..]), none = ~Vector512.Equals(y, y);
@@ -59,11 +58,12 @@ internal sealed class TrialBench(ITrialModel model, PreparedFigure[] prepared)
                 difference += step - l;
                 differences += (step * step) - (l * l);
                 Vector512<double> bent = l;
-                if (bends)
+                if (prepared.Figure.Pole is { } pole)
                 {
                     // As TrialFigure.Bent, and left in its place to be tallied.
-                    Vector512<double> turned = Vector512<double>.One - (l / above), reached = pole + (above / turned);
-                    bent = Vector512.ConditionalSelect(Vector512.GreaterThan(turned, Vector512<double>.Zero), reached, Vector512.Create(double.PositiveInfinity)) - middle;
+                    Vector512<double> turned = TrialFigure.Turned(value, pole, new Lanes(l)).Values;
+                    bent = Vector512.ConditionalSelect(
+                        Vector512.GreaterThan(turned, Vector512.Create(pole)), turned, Vector512.Create(double.PositiveInfinity)) - middle;
                     bent.CopyTo(linear[at..]);
                 }
 

@@ -14,9 +14,9 @@ internal static class CylindersPart
         (string, string) length = ("unit", text.Unit(QuantityKind.Length)), volume = ("unit", text.Unit(QuantityKind.Volume));
         yield return new Heading(words.Of(Phrase.CylindersHead), 2);
         yield return new Paragraph(words.Of(Phrase.CylindersLead), Style.Small);
-        foreach (string method in Method(results, text, words))
+        foreach (MethodNote note in results.Method())
         {
-            yield return new Paragraph(method, Style.Small);
+            yield return new Paragraph(Said(note, results.Trials!, text, words), Style.Small);
         }
 
         Table first = Known(
@@ -56,33 +56,19 @@ internal static class CylindersPart
         string? End(ResultQuantity? quantity, Func<ResultQuantity, double?> end) => quantity is null ? null : text.End(quantity, end);
     }
 
-    private static IEnumerable<string> Method(Results results, ResultsText text, SheetWording words)
+    private static string Said(MethodNote note, TrialReport trials, ResultsText text, SheetWording words)
     {
-        if (results.Trials is not { } trials)
-        {
-            yield break;
-        }
-
         (string, string) run = ("trials", text.Trials), seed = ("seed", trials.Options.Seed.ToString(CultureInfo.InvariantCulture));
         (string, string) digits = ("digits", words.Of(trials.Options.Digits == 1 ? Phrase.DigitOne : Phrase.DigitTwo));
-        if (trials.FailsAt is not { } fails)
+        string fails = trials.FailsAt ?? "";
+        string figure = trials.FailsOn is { } cylinder ? words.Of(Phrase.MethodFigure, ("figure", fails), ("cylinder", cylinder)) : fails;
+        return note switch
         {
-            yield return words.Of(Phrase.MethodFirstOrder, run, seed, digits);
-        }
-        else
-        {
-            string figure = trials.FailsOn is { } cylinder ? words.Of(Phrase.MethodFigure, ("figure", fails), ("cylinder", cylinder)) : fails;
-            yield return words.Of(Phrase.MethodTrials, run, seed, digits, ("figure", figure));
-            if (results.RatioSpread is not null)
-            {
-                yield return words.Of(Phrase.MethodSpread);
-            }
-        }
-
-        if (trials.IsCapped)
-        {
-            yield return words.Of(Phrase.MethodUnsure);
-        }
+            MethodNote.FirstOrder => words.Of(Phrase.MethodFirstOrder, run, seed, digits),
+            MethodNote.Trials => words.Of(Phrase.MethodTrials, run, seed, digits, ("figure", figure)),
+            MethodNote.SpreadIsBiased => words.Of(Phrase.MethodSpread),
+            _ => words.Of(Phrase.MethodUnsure),
+        };
     }
 
     /// <summary>The parts of the clearance volume.</summary>

@@ -25,7 +25,7 @@ internal static class SpreadPart
                 new Column(words.Of(Phrase.To)), new Column(words.Of(Phrase.WorstFrom)), new Column(words.Of(Phrase.To)),
             ],
             rows);
-        if (results.RatioSpread is not null && !results.RatiosDiffer)
+        if (results.RatiosDiffer == false)
         {
             yield return new Paragraph(words.Of(Phrase.SpreadNone));
         }

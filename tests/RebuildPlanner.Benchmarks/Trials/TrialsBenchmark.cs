@@ -37,7 +37,7 @@ internal static class TrialsBenchmark
         (double Seconds, MonteCarlo Run)[] controlled = [.. Enumerable.Range(1, Seeds).Select(seed => Timed(engine, few with { Seed = (ulong)seed }))];
         MonteCarlo truth = MonteCarlo.Run(engine, new TrialOptions(Seed: 4711, Trials: 4 * Trials));
 
-        double rivalSeconds = rival.Min(row => row[0]), ourSeconds = ours.Min(run => run.Seconds), fewSeconds = Median(controlled.Select(run => run.Seconds));
+        double rivalSeconds = rival.Min(row => row[0]), ourSeconds = ours.Min(run => run.Seconds), fewSeconds = ByTurns.Median(controlled.Select(run => run.Seconds));
         Say($"trials: {Trials} plain, ours {1e3 * ourSeconds:0.0} ms on two threads, numpy {1e3 * rivalSeconds:0} ms; {rivalSeconds / ourSeconds:0.0} times as fast (wanted ≥ {WantedPlain:0} with AVX-512)");
 
         double ourRms = Rms(controlled.Select(run => Limits(run.Run)), Limits(truth)), rivalRms = Rms(rival.Select(LimitsOf), Limits(truth));
@@ -92,12 +92,6 @@ internal static class TrialsBenchmark
 
     private static double Rms(IEnumerable<double[]> runs, double[] truth) =>
         Math.Sqrt(runs.Average(run => run.Zip(truth, (one, true_) => (one - true_) * (one - true_)).Average()));
-
-    private static double Median(IEnumerable<double> times)
-    {
-        double[] sorted = [.. times.Order()];
-        return sorted[sorted.Length / 2];
-    }
 
     // The model of the script, to the letter; only the ratio and its spread are asked for, as there.
     private static EngineTrials Engine()
